@@ -3,7 +3,10 @@ import { trackRatio } from '../parts/taper.ts';
 import type { Rotation, TrackRatio } from '../units.ts';
 import type { Block, BlockSettings, BlockValues, PotentiometerHalves } from './block.ts';
 
-function mapValues<In, Out>(record: Readonly<Record<string, In>>, change: (value: In) => Out): Record<string, Out> {
+function mapValues<In, Out>(
+  record: Readonly<Record<string, In>>,
+  change: (value: In) => Out,
+): Record<string, Out> {
   return Object.fromEntries(Object.entries(record).map(([name, value]) => [name, change(value)]));
 }
 
@@ -38,7 +41,11 @@ export function valuesOf(settings: BlockSettings): BlockValues {
 }
 
 /** Resistances between the wiper and either end of the potentiometer that a knob turns, in ohms. */
-export function potentiometerHalves(block: Block, settings: BlockSettings, knob: string): PotentiometerHalves {
+export function potentiometerHalves(
+  block: Block,
+  settings: BlockSettings,
+  knob: string,
+): PotentiometerHalves {
   const values = valuesOf(settings);
   const total = values.part(need(block.knobs, knob, 'knob').part);
   const ratio: TrackRatio = values.ratio(knob);

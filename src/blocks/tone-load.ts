@@ -3,13 +3,23 @@ import type { BlockElement, BlockSettings, ChoiceSpec, PartSpec } from './block.
 /** What the next grid puts across the output: parts that every passive tone network has. */
 export const TONE_LOAD_PARTS: Readonly<Record<string, PartSpec>> = {
   loadResistance: {
-    label: 'Load resistance', short: 'Load', designator: 'R9', kind: 'resistor', unit: 'Ω',
-    fallback: 1e6, range: [1e3, 1e9],
+    label: 'Load resistance',
+    short: 'Load',
+    designator: 'R9',
+    kind: 'resistor',
+    unit: 'Ω',
+    fallback: 1e6,
+    range: [1e3, 1e9],
     help: 'The grid leak that follows. Lower it and the network loses level, the bass most.',
   },
   loadCapacitance: {
-    label: 'Load capacitance', short: 'Load stray', designator: 'C9', kind: 'quantity', unit: 'F',
-    fallback: 47e-12, range: [0, 1e-6],
+    label: 'Load capacitance',
+    short: 'Load stray',
+    designator: 'C9',
+    kind: 'quantity',
+    unit: 'F',
+    fallback: 47e-12,
+    range: [0, 1e-6],
     help: 'Capacitance of the next grid and its wiring. Raise it and the extreme treble falls.',
   },
 };
