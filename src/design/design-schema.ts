@@ -35,6 +35,7 @@ const line = v.looseObject(
 const voicing = v.looseObject({
   letter: v.picklist(VOICING_LETTERS),
   name: text,
+  colour: v.optional(v.picklist(VOICING_LETTERS)),
   line,
 });
 

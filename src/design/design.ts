@@ -6,13 +6,15 @@ import { defaultSettings } from '../blocks/settings.ts';
 /** Letters of voicings, in the order in which they are given out. */
 export const VOICING_LETTERS = ['A', 'B', 'C', 'D', 'E', 'F', 'G', 'H'] as const;
 
-/** Letter of a voicing; it also picks the colour and the dash of its curve. */
+/** Letter of a voicing; each letter has a colour and a dash of its own. */
 export type VoicingLetter = (typeof VOICING_LETTERS)[number];
 
 /** One full set of knob positions and part values. */
 export interface Voicing {
   readonly letter: VoicingLetter;
   readonly name: string;
+  /** Whose colour and dash its curve has; its own letter's unless the user chose another. */
+  readonly colour: VoicingLetter;
   readonly line: LineSettings;
 }
 
@@ -61,7 +63,7 @@ export function defaultDesign(): Design {
     author: '',
     revision: 1,
     notes: '',
-    voicings: [{ letter: 'A', name: 'Stock', line: defaultLine() }],
+    voicings: [{ letter: 'A', name: 'Stock', colour: 'A', line: defaultLine() }],
     active: 'A',
   };
 }

@@ -107,7 +107,7 @@ export function readDesign(text: string): Design {
         return [slot, given ? completeSlot(`voicings.${index}.line.${slot}`, slot, given) : { ...fallback[slot], present: false }];
       }),
     ) as LineSettings;
-    return { ...voicing, line: { ...voicing.line, ...line } };
+    return { ...voicing, colour: voicing.colour ?? voicing.letter, line: { ...voicing.line, ...line } };
   });
   return { ...file, version: DESIGN_VERSION, voicings };
 }

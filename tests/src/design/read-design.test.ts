@@ -31,13 +31,13 @@ describe('reading a design', () => {
     const read = readDesign(
       changed((file) => {
         file['later'] = { kept: true };
-        file['voicings'][0].colour = 'own';
+        file['voicings'][0].hue = 'own';
         file['voicings'][0].line.tone.variants['three-knob'].futures = [1];
       }),
     ) as Design & Record<string, any>;
     expect(read['later']).toEqual({ kept: true });
     const again = JSON.parse(writeDesign(read));
-    expect(again.voicings[0].colour).toBe('own');
+    expect(again.voicings[0].hue).toBe('own');
     expect(again.voicings[0].line.tone.variants['three-knob'].futures).toEqual([1]);
   });
 

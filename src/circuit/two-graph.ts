@@ -1,0 +1,144 @@
+import { NotchworkError } from '../errors.ts';
+import { type Element, GROUND, type NodeName, type NodePair, type Wiring } from './wiring.ts';
+
+/**
+ * The two graphs of a wiring. Every element is an edge in the current graph (where its current
+ * flows) and an edge in the voltage graph (whose voltage drives it); for R, C and L they coincide.
+ * The nodal determinant is `Σ ± Π weights` over the edge sets that are spanning trees of both graphs
+ * (Kirchhoff 1847 for passive networks; W. Mayeda, Graph Theory, 1972, ch. 9, for active ones, from
+ * memory).
+ */
+
+/** An edge between two node numbers; ground is number 0. */
+export interface Edge {
+  readonly from: number;
+  readonly to: number;
+}
+
+/** One way of putting an element into a tree. */
+export interface Inclusion {
+  readonly current: Edge;
+  readonly voltage: Edge;
+}
+
+/** An element (or the source) as the tree search sees it. */
+export interface TreeEdge {
+  /** Index into the wiring's elements; −1 for the source. */
+  readonly element: number;
+  readonly kind: Element['kind'] | 'source';
+  /** Whether it may be left out of a tree. */
+  readonly optional: boolean;
+  /** Ways to include it; the second one of a `voltage-gain` carries the factor `−gain`. */
+  readonly inclusions: readonly Inclusion[];
+}
+
+/** A wiring with its nodes numbered and its edges in the order in which they are decided. */
+export interface TwoGraph {
+  readonly nodeCount: number;
+  /** The source's edge between its own nodes (denominator) and one for each output (numerators). */
+  readonly source: readonly Inclusion[];
+  readonly edges: readonly TreeEdge[];
+}
+
+function treeEdge(element: Element, index: number, edgeOf: (pair: NodePair) => Edge): TreeEdge {
+  const own = edgeOf(element.nodes);
+  switch (element.kind) {
+    case 'transconductance':
+      return {
+        element: index,
+        kind: element.kind,
+        optional: true,
+        inclusions: [{ current: own, voltage: edgeOf(element.control) }],
+      };
+    case 'voltage-gain':
+      // The limit of a stiff current source: g·(V(nodes) − gain·V(control)) as g grows without bound,
+      // so that only trees with this edge remain.
+      return {
+        element: index,
+        kind: element.kind,
+        optional: false,
+        inclusions: [
+          { current: own, voltage: own },
+          { current: own, voltage: edgeOf(element.control) },
+        ],
+      };
+    default:
+      return {
+        element: index,
+        kind: element.kind,
+        optional: true,
+        inclusions: [{ current: own, voltage: own }],
+      };
+  }
+}
+
+/**
+ * Orders edges so that few nodes are open (touched by decided and by undecided edges) at any time:
+ * greedily the edge that leaves the fewest open nodes, which keeps the diagram small.
+ */
+function orderEdges(edges: readonly TreeEdge[], nodeCount: number, opened: Iterable<number>): TreeEdge[] {
+  const nodesOf = (edge: TreeEdge): Set<number> =>
+    new Set(edge.inclusions.flatMap(({ current, voltage }) => [current.from, current.to, voltage.from, voltage.to]));
+  const remaining = edges.map((edge) => ({ edge, nodes: nodesOf(edge) }));
+  const uses = new Array<number>(nodeCount).fill(0);
+  for (const { nodes } of remaining) for (const node of nodes) uses[node] = uses[node]! + 1;
+  const open = new Set(opened);
+  const ordered: TreeEdge[] = [];
+  while (remaining.length > 0) {
+    let best = 0;
+    let bestCost = Number.POSITIVE_INFINITY;
+    remaining.forEach(({ nodes }, index) => {
+      let cost = 0;
+      for (const node of nodes) {
+        if (!open.has(node)) cost += 1;
+        if (uses[node] === 1) cost -= 1;
+      }
+      if (cost < bestCost) {
+        best = index;
+        bestCost = cost;
+      }
+    });
+    const [chosen] = remaining.splice(best, 1);
+    ordered.push(chosen!.edge);
+    for (const node of chosen!.nodes) {
+      open.add(node);
+      uses[node] = uses[node]! - 1;
+      if (uses[node] === 0) open.delete(node);
+    }
+  }
+  return ordered;
+}
+
+/**
+ * Numbers the nodes of a wiring and sets up both graphs.
+ *
+ * @throws NotchworkError `netlist-topology` for a name used twice.
+ */
+export function twoGraph(wiring: Wiring): TwoGraph {
+  const numbers = new Map<NodeName, number>([[GROUND, 0]]);
+  const numberOf = (node: NodeName): number => {
+    let number = numbers.get(node);
+    if (number === undefined) {
+      number = numbers.size;
+      numbers.set(node, number);
+    }
+    return number;
+  };
+  const edgeOf = ([from, to]: NodePair): Edge => ({ from: numberOf(from), to: numberOf(to) });
+  const names = new Set<string>();
+  for (const { name } of wiring.elements) {
+    if (names.has(name)) {
+      throw new NotchworkError('netlist-topology', `Two elements are called ${name}; give one another name.`);
+    }
+    names.add(name);
+  }
+  const current = edgeOf(wiring.source);
+  const source = [wiring.source, ...wiring.outputs].map((pair): Inclusion => ({ current, voltage: edgeOf(pair) }));
+  const edges = wiring.elements.map((element, index) => treeEdge(element, index, edgeOf));
+  const opened = source.flatMap(({ voltage }) => [voltage.from, voltage.to]);
+  return {
+    nodeCount: numbers.size,
+    source,
+    edges: orderEdges(edges, numbers.size, [current.from, current.to, ...opened]),
+  };
+}
