@@ -44,13 +44,22 @@ function floatingNodes(wiring: Wiring): readonly string[] {
       }
     }
   }
-  const all = new Set([...pairs, ...wiring.elements.flatMap((e) => ('control' in e ? [e.control] : [])), ...wiring.outputs].flat());
+  const all = new Set(
+    [
+      ...pairs,
+      ...wiring.elements.flatMap((e) => ('control' in e ? [e.control] : [])),
+      ...wiring.outputs,
+    ].flat(),
+  );
   return [...all].filter((node) => !joined.has(node));
 }
 
 function checkTopology(wiring: Wiring, diagram: Diagram): void {
   if (wiring.source[0] === wiring.source[1]) {
-    throw new NotchworkError('netlist-topology', `The source has both ends at node ${wiring.source[0]}; join it to two nodes.`);
+    throw new NotchworkError(
+      'netlist-topology',
+      `The source has both ends at node ${wiring.source[0]}; join it to two nodes.`,
+    );
   }
   const floating = floatingNodes(wiring);
   if (floating.length > 0) {
@@ -70,7 +79,8 @@ function checkTopology(wiring: Wiring, diagram: Diagram): void {
 /** Drops common zeros at s = 0 and zero leading coefficients, so that the order is what it looks like. */
 function trimmed(numerator: readonly number[], denominator: readonly number[]): TransferFunction {
   let start = 0;
-  while (start < denominator.length - 1 && denominator[start] === 0 && (numerator[start] ?? 0) === 0) start += 1;
+  while (start < denominator.length - 1 && denominator[start] === 0 && (numerator[start] ?? 0) === 0)
+    start += 1;
   const cut = (coefficients: readonly number[]): number[] => {
     let end = coefficients.length;
     while (end > start + 1 && coefficients[end - 1] === 0) end -= 1;
@@ -106,7 +116,10 @@ class CompiledNetwork implements Network {
     const { numerators, denominator } = this.evaluate(values);
     const numerator = numerators[output];
     if (numerator === undefined) {
-      throw new NotchworkError('value-out-of-range', `Output ${output} was asked for; there are ${numerators.length}.`);
+      throw new NotchworkError(
+        'value-out-of-range',
+        `Output ${output} was asked for; there are ${numerators.length}.`,
+      );
     }
     return trimmed(numerator, denominator);
   }

@@ -20,10 +20,16 @@ export class Evaluator {
     const offsets: number[] = [];
     let size = 1; // offset 0 holds the polynomial 1, where END leads
     const operandOf = (branch: Branch): { offset: number; length: number } =>
-      branch.next === END ? { offset: 0, length: 1 } : { offset: offsets[branch.next]!, length: lengths[branch.next]! };
+      branch.next === END
+        ? { offset: 0, length: 1 }
+        : { offset: offsets[branch.next]!, length: lengths[branch.next]! };
     const program: number[] = [];
     for (const step of diagram.steps) {
-      const terms = termsOf(step).map(({ branch, weight, shift }) => ({ ...operandOf(branch), weight, shift }));
+      const terms = termsOf(step).map(({ branch, weight, shift }) => ({
+        ...operandOf(branch),
+        weight,
+        shift,
+      }));
       const length = Math.max(...terms.map((term) => term.length + term.shift));
       for (const term of terms) program.push(size + term.shift, term.offset, term.length, term.weight);
       offsets.push(size);

@@ -78,7 +78,9 @@ function treeEdge(element: Element, index: number, edgeOf: (pair: NodePair) => E
  */
 function orderEdges(edges: readonly TreeEdge[], nodeCount: number, opened: Iterable<number>): TreeEdge[] {
   const nodesOf = (edge: TreeEdge): Set<number> =>
-    new Set(edge.inclusions.flatMap(({ current, voltage }) => [current.from, current.to, voltage.from, voltage.to]));
+    new Set(
+      edge.inclusions.flatMap(({ current, voltage }) => [current.from, current.to, voltage.from, voltage.to]),
+    );
   const remaining = edges.map((edge) => ({ edge, nodes: nodesOf(edge) }));
   const uses = new Array<number>(nodeCount).fill(0);
   for (const { nodes } of remaining) for (const node of nodes) uses[node] = uses[node]! + 1;
@@ -133,7 +135,9 @@ export function twoGraph(wiring: Wiring): TwoGraph {
     names.add(name);
   }
   const current = edgeOf(wiring.source);
-  const source = [wiring.source, ...wiring.outputs].map((pair): Inclusion => ({ current, voltage: edgeOf(pair) }));
+  const source = [wiring.source, ...wiring.outputs].map(
+    (pair): Inclusion => ({ current, voltage: edgeOf(pair) }),
+  );
   const edges = wiring.elements.map((element, index) => treeEdge(element, index, edgeOf));
   const opened = source.flatMap(({ voltage }) => [voltage.from, voltage.to]);
   return {

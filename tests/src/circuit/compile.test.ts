@@ -7,7 +7,11 @@ import { solveNodal } from './nodal-solver.ts';
 import { randomCircuit } from './random-wiring.ts';
 
 const resistor = (name: string, a: string, b: string): Element => ({ kind: 'resistor', name, nodes: [a, b] });
-const capacitor = (name: string, a: string, b: string): Element => ({ kind: 'capacitor', name, nodes: [a, b] });
+const capacitor = (name: string, a: string, b: string): Element => ({
+  kind: 'capacitor',
+  name,
+  nodes: [a, b],
+});
 const inductor = (name: string, a: string, b: string): Element => ({ kind: 'inductor', name, nodes: [a, b] });
 const circuit = (elements: Element[], outputs: Wiring['outputs'] = [['out', '0']]): Wiring => ({
   elements,
@@ -34,7 +38,13 @@ describe('compile', () => {
 
   it('solves the series resonant circuit, two outputs over one denominator', () => {
     const network = compile(
-      circuit([resistor('R', 'in', 'a'), inductor('L', 'a', 'out'), capacitor('C', 'out', '0')], [['out', '0'], ['in', 'out']]),
+      circuit(
+        [resistor('R', 'in', 'a'), inductor('L', 'a', 'out'), capacitor('C', 'out', '0')],
+        [
+          ['out', '0'],
+          ['in', 'out'],
+        ],
+      ),
     );
     const { numerators, denominator } = network.evaluate([1000, 2, 1e-6]);
     expect(denominator).toEqual([1, 1e-3, 2e-6]);
@@ -73,7 +83,9 @@ describe('compile', () => {
   });
 
   it('needs no special case for a resistor of 0 Ω', () => {
-    const network = compile(circuit([resistor('R1', 'in', 'out'), resistor('R2', 'out', '0'), capacitor('C', 'out', '0')]));
+    const network = compile(
+      circuit([resistor('R1', 'in', 'out'), resistor('R2', 'out', '0'), capacitor('C', 'out', '0')]),
+    );
     expect(network.transfer([0, 1000, 1e-6])).toEqual({ numerator: [1000], denominator: [1000] });
     expect(network.transfer([1000, 0, 1e-6])).toEqual({ numerator: [0], denominator: [1000] });
   });
@@ -103,7 +115,10 @@ describe('compile', () => {
         expected.forEach((voltage, output) => {
           const top = at(numerators[output]!);
           // Compared as N − H·D, relative to the larger side: 1e-7 allows for the elimination's own rounding.
-          const right = { re: voltage.re * bottom.re - voltage.im * bottom.im, im: voltage.re * bottom.im + voltage.im * bottom.re };
+          const right = {
+            re: voltage.re * bottom.re - voltage.im * bottom.im,
+            im: voltage.re * bottom.im + voltage.im * bottom.re,
+          };
           const scale = Math.hypot(bottom.re, bottom.im) * Math.max(1e-3, Math.hypot(voltage.re, voltage.im));
           expect(Math.hypot(top.re - right.re, top.im - right.im) / scale).toBeLessThan(1e-7);
         });
@@ -115,7 +130,8 @@ describe('compile', () => {
     const random = seededRandom(5);
     for (let index = 0; index < 50; index += 1) {
       const { wiring, values } = randomCircuit(random, 8, { inductors: true, controlled: false });
-      for (const coefficient of compile(wiring).evaluate(values).denominator) expect(coefficient).toBeGreaterThanOrEqual(0);
+      for (const coefficient of compile(wiring).evaluate(values).denominator)
+        expect(coefficient).toBeGreaterThanOrEqual(0);
     }
   });
 });
@@ -127,12 +143,18 @@ describe('compile refuses', () => {
   });
 
   it('a source with both ends at one node', () => {
-    const error = errorOf(() => compile({ elements: [resistor('R', 'in', '0')], source: ['in', 'in'], outputs: [['in', '0']] }));
+    const error = errorOf(() =>
+      compile({ elements: [resistor('R', 'in', '0')], source: ['in', 'in'], outputs: [['in', '0']] }),
+    );
     expect(error.code).toBe('netlist-topology');
   });
 
   it('a node without a path to ground, by name', () => {
-    const error = errorOf(() => compile(circuit([resistor('R', 'in', 'out'), resistor('R2', 'out', '0'), resistor('R3', 'lost', 'also')])));
+    const error = errorOf(() =>
+      compile(
+        circuit([resistor('R', 'in', 'out'), resistor('R2', 'out', '0'), resistor('R3', 'lost', 'also')]),
+      ),
+    );
     expect(error.code).toBe('netlist-topology');
     expect(error.message).toMatch(/lost/);
   });
@@ -151,14 +173,19 @@ describe('compile refuses', () => {
   });
 
   it('more elements than it takes', () => {
-    const elements = Array.from({ length: MOST_ELEMENTS + 1 }, (_, index) => resistor(`R${index}`, 'in', index === 0 ? 'out' : '0'));
+    const elements = Array.from({ length: MOST_ELEMENTS + 1 }, (_, index) =>
+      resistor(`R${index}`, 'in', index === 0 ? 'out' : '0'),
+    );
     expect(errorOf(() => compile(circuit(elements))).code).toBe('netlist-too-large');
   });
 
   it('a tangle with more partial sums than it takes, without hanging', () => {
     const elements: Element[] = [];
     for (let a = 0; a < 14; a += 1) {
-      for (let b = a + 1; b < 14; b += 1) elements.push(resistor(`R${a}_${b}`, a === 0 ? '0' : a === 1 ? 'in' : `n${a}`, b === 1 ? 'in' : `n${b}`));
+      for (let b = a + 1; b < 14; b += 1)
+        elements.push(
+          resistor(`R${a}_${b}`, a === 0 ? '0' : a === 1 ? 'in' : `n${a}`, b === 1 ? 'in' : `n${b}`),
+        );
     }
     const start = Date.now();
     const error = errorOf(() => compile({ elements, source: ['in', '0'], outputs: [['n2', '0']] }));

@@ -28,9 +28,13 @@ export function solveNodal(wiring: Wiring, values: readonly number[], omega: num
   for (const node of [...wiring.source, ...wiring.outputs.flat()]) names.add(node);
   names.delete('0');
   const nodes = [...names];
-  const branches = wiring.elements.filter((e) => e.kind === 'voltage-gain' || e.kind === 'resistor' || e.kind === 'inductor');
+  const branches = wiring.elements.filter(
+    (e) => e.kind === 'voltage-gain' || e.kind === 'resistor' || e.kind === 'inductor',
+  );
   const size = nodes.length + branches.length + 1;
-  const matrix = Array.from({ length: size }, () => Array.from({ length: size + 1 }, (): Complex => ({ re: 0, im: 0 })));
+  const matrix = Array.from({ length: size }, () =>
+    Array.from({ length: size + 1 }, (): Complex => ({ re: 0, im: 0 })),
+  );
   const put = (row: number, column: number, value: Complex): void => {
     if (row >= 0 && column >= 0) matrix[row]![column] = add(matrix[row]![column]!, value);
   };
@@ -84,7 +88,10 @@ export function solveNodal(wiring: Wiring, values: readonly number[], omega: num
       const factor = over(matrix[row]![column]!, matrix[column]![column]!);
       if (factor.re === 0 && factor.im === 0) continue;
       for (let k = column; k <= size; k += 1) {
-        matrix[row]![k] = add(matrix[row]![k]!, times({ re: -factor.re, im: -factor.im }, matrix[column]![k]!));
+        matrix[row]![k] = add(
+          matrix[row]![k]!,
+          times({ re: -factor.re, im: -factor.im }, matrix[column]![k]!),
+        );
       }
     }
   }

@@ -14,7 +14,8 @@ export interface RandomKinds {
 
 /** Draws a circuit of `nodeCount` nodes: a resistor tree that joins them all, then extra branches. */
 export function randomCircuit(random: () => number, nodeCount: number, kinds: RandomKinds): RandomCircuit {
-  const name = (node: number): string => (node === 0 ? '0' : node === 1 ? 'in' : node === nodeCount - 1 ? 'out' : `n${node}`);
+  const name = (node: number): string =>
+    node === 0 ? '0' : node === 1 ? 'in' : node === nodeCount - 1 ? 'out' : `n${node}`;
   const pick = (): number => Math.floor(random() * nodeCount);
   const between = (low: number, high: number): number => low * (high / low) ** random();
   const elements: Element[] = [];
@@ -29,13 +30,19 @@ export function randomCircuit(random: () => number, nodeCount: number, kinds: Ra
     return [name(first), name(second)];
   };
   for (let node = 2; node < nodeCount; node += 1) {
-    push({ kind: 'resistor', name: `R${node}`, nodes: [name(node), name(Math.floor(random() * node))] }, between(1e3, 1e6));
+    push(
+      { kind: 'resistor', name: `R${node}`, nodes: [name(node), name(Math.floor(random() * node))] },
+      between(1e3, 1e6),
+    );
   }
   const extra = nodeCount + Math.floor(random() * nodeCount);
   for (let index = 0; index < extra; index += 1) {
     const draw = random();
     if (kinds.controlled && draw < 0.12) {
-      push({ kind: 'transconductance', name: `G${index}`, nodes: two(), control: two() }, between(1e-6, 1e-3));
+      push(
+        { kind: 'transconductance', name: `G${index}`, nodes: two(), control: two() },
+        between(1e-6, 1e-3),
+      );
     } else if (kinds.controlled && draw < 0.18) {
       // A stiff source feeds its own node through a resistor, as any real stage does.
       const own = `e${index}`;
@@ -50,7 +57,14 @@ export function randomCircuit(random: () => number, nodeCount: number, kinds: Ra
     }
   }
   return {
-    wiring: { elements, source: ['in', '0'], outputs: [['out', '0'], ['out', 'in']] },
+    wiring: {
+      elements,
+      source: ['in', '0'],
+      outputs: [
+        ['out', '0'],
+        ['out', 'in'],
+      ],
+    },
     values,
   };
 }
