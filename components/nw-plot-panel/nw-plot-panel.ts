@@ -6,7 +6,8 @@ import '../nw-curve-table/nw-curve-table.ts';
 import '../nw-figures/nw-figures.ts';
 import type { Figure } from '../nw-figures/nw-figures.ts';
 import '../nw-plot/nw-plot.ts';
-import type { NwPlot, PlotCurve } from '../nw-plot/nw-plot.ts';
+import type { NwPlot } from '../nw-plot/nw-plot.ts';
+import type { PlotCurve } from '../../src/sheet/plot-model.ts';
 import { baseStyles } from '../theme.ts';
 import { plotPanelStyles } from './nw-plot-panel.styles.ts';
 

@@ -56,7 +56,7 @@ export function solveNodal(wiring: Wiring, values: readonly number[], omega: num
     const value = values[index]!;
     const [a, b] = element.nodes;
     if (element.kind === 'capacitor' || element.kind === 'transconductance') {
-      const [c, d] = element.kind === 'capacitor' ? element.nodes : element.control;
+      const [c, d] = 'control' in element ? element.control : element.nodes;
       const admittance = element.kind === 'capacitor' ? { re: 0, im: omega * value } : real(value);
       const minus = times(real(-1), admittance);
       put(node(a), node(c), admittance);
@@ -68,9 +68,10 @@ export function solveNodal(wiring: Wiring, values: readonly number[], omega: num
     } else if (element.kind === 'inductor') {
       unknownCurrent(a, b, { re: 0, im: omega * value });
     } else {
+      const [c, d] = 'control' in element ? element.control : element.nodes;
       const row = unknownCurrent(a, b, real(0));
-      put(row, node(element.control[0]), real(-value));
-      put(row, node(element.control[1]), real(value));
+      put(row, node(c), real(-value));
+      put(row, node(d), real(value));
     }
   });
   const sourceRow = unknownCurrent(wiring.source[0], wiring.source[1], real(0));

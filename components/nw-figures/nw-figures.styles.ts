@@ -1,0 +1,35 @@
+import { css } from 'lit';
+
+/** Styles of `nw-figures`. */
+export const figuresStyles = css`
+  :host {
+    display: block;
+    container-type: inline-size;
+  }
+  dl {
+    margin: 0;
+    display: grid;
+    gap: 12px 20px;
+    grid-template-columns: repeat(auto-fill, minmax(130px, 1fr));
+  }
+  dt,
+  .reference {
+    color: var(--nw-ink-soft);
+    font-size: 13px;
+  }
+  dd {
+    margin: 0;
+    font-weight: 620;
+    font-size: 18px;
+    line-height: 1.25;
+  }
+  dd .note {
+    display: block;
+    font-size: 13px;
+    font-weight: 400;
+    color: var(--nw-ink-soft);
+  }
+  .reference {
+    margin: 12px 0 0;
+  }
+`;
