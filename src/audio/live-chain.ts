@@ -164,6 +164,10 @@ export class LiveChain {
     const was = this.#setting;
     const next = this.#wanted;
     const headroom = this.#headroomFor(next);
+    if (headroom === this.#output.level && isSame(was, next)) {
+      this.#setting = next;
+      return;
+    }
     const lowers = headroom < this.#output.level;
     const build = this.#build(context, next, next.gain / was.gain);
     // Only now, with everything built and connected, is it time to look at the clock.
@@ -242,6 +246,20 @@ export class LiveChain {
     if (at === undefined) node.gain.value = to;
     else fade(node.gain, from, to, at);
   }
+}
+
+/** Whether two settings sound the same, the headroom apart. */
+function isSame(one: Setting, other: Setting): boolean {
+  return (
+    one.gain === other.gain &&
+    one.bypass === other.bypass &&
+    one.muted === other.muted &&
+    one.line.length === other.line.length &&
+    one.line.every(
+      ({ key, sections }, index) =>
+        key === other.line[index]!.key && sections === other.line[index]!.sections,
+    )
+  );
 }
 
 function wetLevel({ bypass, muted }: Setting): number {

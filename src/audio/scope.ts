@@ -50,12 +50,13 @@ export class Scope {
    * @param delay in milliseconds.
    */
   timeout(action: () => void, delay: number): () => void {
-    const forget = this.add(() => clearTimeout(handle));
+    if (this.#disposed) return () => {};
+    let forget = (): void => {};
     const handle = setTimeout(() => {
       forget();
       action();
     }, delay);
-    if (this.#disposed) clearTimeout(handle);
+    forget = this.add(() => clearTimeout(handle));
     return forget;
   }
 
