@@ -10,68 +10,68 @@ import type { TransferFunction } from '../transfer-function.ts';
  * than the three multiplications.
  */
 
-/** The signed coefficient of a power, as E and O have it, 0 above the degree; scaled. */
-function signed(coefficients: readonly number[], power: number, scale: number): number {
-  if (power >= coefficients.length) return 0;
-  return (power & 2 ? -scale : scale) * coefficients[power]!;
+type Four = [number, number, number, number];
+type Six = [...Four, number, number];
+type Ten = [...Six, number, number, number, number];
+type Signed = readonly number[];
+
+/** Coefficients with the signs that E and O have, scaled, filled up with 0 to a length. */
+function signed(coefficients: readonly number[], length: number, scale: number): Signed {
+  const list: number[] = [];
+  for (let power = 0; power < length; power++) {
+    const value = power < coefficients.length ? coefficients[power]! * scale : 0;
+    list.push(power & 2 ? -value : value);
+  }
+  return list;
 }
 
-function upToCubic(
-  out: Float64Array,
-  { numerator, denominator }: TransferFunction,
-  squares: Float64Array,
-  scale: number,
-): void {
-  const n0 = signed(numerator, 0, scale);
-  const n1 = signed(numerator, 1, scale);
-  const n2 = signed(numerator, 2, scale);
-  const n3 = signed(numerator, 3, scale);
-  const d0 = signed(denominator, 0, scale);
-  const d1 = signed(denominator, 1, scale);
-  const d2 = signed(denominator, 2, scale);
-  const d3 = signed(denominator, 3, scale);
+/** Orders 0 to 3. */
+function upToThird(out: Float64Array, above: Signed, below: Signed, squares: Float64Array): void {
+  const [n0, n1, n2, n3] = above as Four;
+  const [d0, d1, d2, d3] = below as Four;
   for (let point = 0; point < squares.length; point++) {
     const x = squares[point]!;
-    const above = n0 + x * n2;
-    const aboveOdd = n1 + x * n3;
-    const below = d0 + x * d2;
-    const belowOdd = d1 + x * d3;
-    const ratio = (above * above + x * aboveOdd * aboveOdd) / (below * below + x * belowOdd * belowOdd);
+    const even = n0 + x * n2;
+    const odd = n1 + x * n3;
+    const evenBelow = d0 + x * d2;
+    const oddBelow = d1 + x * d3;
+    const ratio = (even * even + x * odd * odd) / (evenBelow * evenBelow + x * oddBelow * oddBelow);
     out[point] = 10 * Math.log10(ratio);
   }
 }
 
-function upToQuintic(
-  out: Float64Array,
-  { numerator, denominator }: TransferFunction,
-  squares: Float64Array,
-  scale: number,
-): void {
-  const n0 = signed(numerator, 0, scale);
-  const n1 = signed(numerator, 1, scale);
-  const n2 = signed(numerator, 2, scale);
-  const n3 = signed(numerator, 3, scale);
-  const n4 = signed(numerator, 4, scale);
-  const n5 = signed(numerator, 5, scale);
-  const d0 = signed(denominator, 0, scale);
-  const d1 = signed(denominator, 1, scale);
-  const d2 = signed(denominator, 2, scale);
-  const d3 = signed(denominator, 3, scale);
-  const d4 = signed(denominator, 4, scale);
-  const d5 = signed(denominator, 5, scale);
+/** Orders 4 and 5. */
+function upToFifth(out: Float64Array, above: Signed, below: Signed, squares: Float64Array): void {
+  const [n0, n1, n2, n3, n4, n5] = above as Six;
+  const [d0, d1, d2, d3, d4, d5] = below as Six;
   for (let point = 0; point < squares.length; point++) {
     const x = squares[point]!;
-    const above = n0 + x * (n2 + x * n4);
-    const aboveOdd = n1 + x * (n3 + x * n5);
-    const below = d0 + x * (d2 + x * d4);
-    const belowOdd = d1 + x * (d3 + x * d5);
-    const ratio = (above * above + x * aboveOdd * aboveOdd) / (below * below + x * belowOdd * belowOdd);
+    const even = n0 + x * (n2 + x * n4);
+    const odd = n1 + x * (n3 + x * n5);
+    const evenBelow = d0 + x * (d2 + x * d4);
+    const oddBelow = d1 + x * (d3 + x * d5);
+    const ratio = (even * even + x * odd * odd) / (evenBelow * evenBelow + x * oddBelow * oddBelow);
     out[point] = 10 * Math.log10(ratio);
   }
 }
 
-/** E² + ω²·O² of a polynomial of any length, from its signed coefficients. */
-function squaredSize(coefficients: Float64Array, x: number): number {
+/** Orders 6 to 9. */
+function upToNinth(out: Float64Array, above: Signed, below: Signed, squares: Float64Array): void {
+  const [n0, n1, n2, n3, n4, n5, n6, n7, n8, n9] = above as Ten;
+  const [d0, d1, d2, d3, d4, d5, d6, d7, d8, d9] = below as Ten;
+  for (let point = 0; point < squares.length; point++) {
+    const x = squares[point]!;
+    const even = n0 + x * (n2 + x * (n4 + x * (n6 + x * n8)));
+    const odd = n1 + x * (n3 + x * (n5 + x * (n7 + x * n9)));
+    const evenBelow = d0 + x * (d2 + x * (d4 + x * (d6 + x * d8)));
+    const oddBelow = d1 + x * (d3 + x * (d5 + x * (d7 + x * d9)));
+    const ratio = (even * even + x * odd * odd) / (evenBelow * evenBelow + x * oddBelow * oddBelow);
+    out[point] = 10 * Math.log10(ratio);
+  }
+}
+
+/** E² + ω²·O² of a polynomial of any length. */
+function squaredSize(coefficients: Signed, x: number): number {
   let even = 0;
   let odd = 0;
   const top = coefficients.length - 1;
@@ -80,14 +80,7 @@ function squaredSize(coefficients: Float64Array, x: number): number {
   return even * even + x * odd * odd;
 }
 
-function anyLength(
-  out: Float64Array,
-  { numerator, denominator }: TransferFunction,
-  squares: Float64Array,
-  scale: number,
-): void {
-  const above = Float64Array.from(numerator, (_, power) => signed(numerator, power, scale));
-  const below = Float64Array.from(denominator, (_, power) => signed(denominator, power, scale));
+function anyOrder(out: Float64Array, above: Signed, below: Signed, squares: Float64Array): void {
   for (let point = 0; point < squares.length; point++) {
     const x = squares[point]!;
     out[point] = 10 * Math.log10(squaredSize(above, x) / squaredSize(below, x));
@@ -120,9 +113,14 @@ export function magnitudeAtSquares(
   transfer: TransferFunction,
   squares: Float64Array,
 ): void {
-  const length = Math.max(transfer.numerator.length, transfer.denominator.length);
-  const scale = scaleFor(transfer.denominator, squares);
-  if (length <= 4) upToCubic(out, transfer, squares, scale);
-  else if (length <= 6) upToQuintic(out, transfer, squares, scale);
-  else anyLength(out, transfer, squares, scale);
+  const { numerator, denominator } = transfer;
+  const longest = Math.max(numerator.length, denominator.length);
+  const length = longest <= 4 ? 4 : longest <= 6 ? 6 : Math.max(longest, 10);
+  const scale = scaleFor(denominator, squares);
+  const above = signed(numerator, length, scale);
+  const below = signed(denominator, length, scale);
+  if (length === 4) upToThird(out, above, below, squares);
+  else if (length === 6) upToFifth(out, above, below, squares);
+  else if (length === 10) upToNinth(out, above, below, squares);
+  else anyOrder(out, above, below, squares);
 }

@@ -23,7 +23,8 @@ function accumulate(out: Float64Array, parts: Float64Array, omegas: Float64Array
     const across = parts[at + 1]!;
     for (let point = 0; point < omegas.length; point++) {
       const omega = omegas[point]!;
-      out[point]! += sign * Math.atan2(-omega * across, 1 - omega * along);
+      // 0 − …, so that a zero on the axis counts as one just left of it
+      out[point]! += sign * Math.atan2(0 - omega * across, 1 - omega * along);
     }
   }
 }
@@ -36,9 +37,24 @@ function phaseAtOrigin({ numerator, denominator }: TransferFunction): Degrees {
   return 90 * (above - below) + (inverted ? 180 : 0);
 }
 
+/** Angle of P(jω) in radians, within half a turn; NaN where P vanishes or overflows. */
+function angleAt(polynomial: readonly number[], omega: number): number {
+  let re = 0;
+  let im = 0;
+  for (let power = polynomial.length - 1; power >= 0; power--) {
+    const turned = polynomial[power]! - im * omega;
+    im = re * omega;
+    re = turned;
+  }
+  return re === 0 && im === 0 ? Number.NaN : Math.atan2(im, re);
+}
+
 /**
- * Unwrapped phase in degrees, one value a point: continuous in ω whatever the spacing of the points,
- * because each root contributes the angle of `1 − jω/root`, which never crosses the negative axis.
+ * Unwrapped phase in degrees, one value a point: continuous in ω whatever the spacing of the points.
+ * Each root contributes the angle of `1 − jω/root`, which never crosses the negative axis; their sum
+ * tells the whole turns, and the polynomials themselves the rest, so that roots which coincide (and are
+ * then badly determined) cost no digits.
+ *
  * It starts at 0 Hz from 90° for each zero there, plus 180° where the gain is negative; a zero on the
  * axis (a perfect notch) steps by +180°. NaN throughout where the numerator is 0.
  *
@@ -55,5 +71,11 @@ export function phaseAtOmegas(out: Float64Array, transfer: TransferFunction, ome
   accumulate(out, reciprocals(transfer.numerator), omegas, 1);
   accumulate(out, reciprocals(transfer.denominator), omegas, -1);
   const start = phaseAtOrigin(transfer);
-  for (let point = 0; point < out.length; point++) out[point] = start + DEGREES * out[point]!;
+  for (let point = 0; point < out.length; point++) {
+    const omega = omegas[point]!;
+    const summed = start + DEGREES * out[point]!;
+    const principal = DEGREES * (angleAt(transfer.numerator, omega) - angleAt(transfer.denominator, omega));
+    const exact = principal + 360 * Math.round((summed - principal) / 360);
+    out[point] = Number.isNaN(exact) ? summed : exact;
+  }
 }

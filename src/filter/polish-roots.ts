@@ -1,7 +1,8 @@
 import { compensatedComplex, compensatedReal } from './compensated.ts';
 import type { Couple, RootStructure } from './root-structure.ts';
 
-const MOST_ROUNDS = 12; // two suffice for roots apart; couples that all but meet take a few more
+const MOST_ROUNDS = 80; // two suffice for roots apart; a root of multiplicity m closes in by 1 − 1/m a round
+const PATIENCE = 6; // rounds without a smaller step before rounding is taken to have won
 const SETTLED = 4 * Number.EPSILON;
 
 /** All roots of a structure, singles first, then both of each couple. */
@@ -83,15 +84,14 @@ class Polisher {
     const half = Math.sqrt(Math.abs(spread));
     const first = this.#correction(at);
     if (spread < 0) {
-      this.#note(first.re, Math.hypot(middle, half));
-      this.#note(first.im, half);
+      this.#note(Math.hypot(first.re, first.im), Math.hypot(middle, half));
       return { middle: middle - first.re, spread: spread + 2 * half * first.im + first.re ** 2 };
     }
     const second = this.#correction(at + 1);
     const mean = (first.re + second.re) / 2;
     const difference = (first.re - second.re) / 2;
     this.#note(mean, Math.abs(middle));
-    this.#note(difference, half);
+    this.#note(difference, Math.abs(middle));
     return { middle: middle - mean, spread: spread - 2 * half * difference + mean ** 2 };
   }
 
@@ -120,14 +120,18 @@ export function polishRoots(coefficients: Float64Array, degree: number, rough: R
   let best = rough;
   let smallest = Number.POSITIVE_INFINITY;
   let current = rough;
+  let idle = 0;
   for (let round = 0; round < MOST_ROUNDS; round++) {
     const { structure, largest } = polisher.round(current);
     current = structure;
     if (largest < smallest) {
       best = structure;
       smallest = largest;
+      idle = 0;
+    } else {
+      idle += 1;
     }
-    if (largest <= SETTLED) break;
+    if (largest <= SETTLED || idle === PATIENCE) break;
   }
   return best;
 }

@@ -2,6 +2,7 @@ import { NotchworkError } from '../errors.ts';
 import { differenceOfProducts } from './compensated.ts';
 import type { Complex } from './complex.ts';
 import { complexRoots } from './complex-roots.ts';
+import { mergeMultipleRoots } from './multiple-roots.ts';
 import { polishRoots } from './polish-roots.ts';
 import { realRoots } from './real-roots.ts';
 import { type Couple, type RootStructure, structureOf } from './root-structure.ts';
@@ -56,7 +57,8 @@ function structureOfScaled(coefficients: Float64Array, degree: number): RootStru
   if (degree === 2) return quadratic(coefficients[0]!, coefficients[1]!, coefficients[2]!);
   const real = realRoots(coefficients, degree);
   if (real !== undefined) return { singles: [...real], couples: [] };
-  return polishRoots(coefficients, degree, structureOf(complexRoots(coefficients, degree)));
+  const rough = structureOf(complexRoots(coefficients, degree));
+  return mergeMultipleRoots(coefficients, polishRoots(coefficients, degree, rough));
 }
 
 function split({ middle, spread }: Couple, real: number[], pairs: Complex[], unit: number): void {

@@ -17,8 +17,8 @@ export interface Curve {
 }
 
 /**
- * Magnitude in dB on a grid, `20·log10|H(jω)|`. This runs for every block on every move of a knob and
- * allocates nothing for functions up to order 5.
+ * Magnitude in dB on a grid, `20·log10|H(jω)|`. This runs for every block on every move of a knob;
+ * it allocates a few numbers a call and nothing a point.
  *
  * A numerator that is 0 gives −Infinity.
  *

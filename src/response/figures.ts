@@ -21,7 +21,7 @@ export interface Figures {
 }
 
 /** Where the bottom of a mid dip is looked for. */
-const DIP_BAND: readonly [Hertz, Hertz] = [100, 5e3];
+const DIP_BAND: readonly [Hertz, Hertz] = [100, 5000];
 /** How far out its shoulders are looked for: what is heard. */
 const SHOULDER_BAND: readonly [Hertz, Hertz] = [20, 20e3];
 const POINTS_PER_OCTAVE = 24;

@@ -100,8 +100,11 @@ describe('multiple roots', () => {
     expect((real[1]! + real[2]!) / -2e3).toBeCloseTo(1, 13);
   });
 
-  it('do not hang, and multiply out to the coefficients again, for a root of multiplicity 6', () => {
-    const coefficients = product(...new Array<number[]>(6).fill([1, 1e-4]));
+  it.each([
+    ['1, whose binomial coefficients are exact', 1],
+    ['1e-4, whose coefficients are rounded', 1e-4],
+  ])('do not hang, and multiply out to the coefficients again, six-fold with time constant %s', (_, tau) => {
+    const coefficients = product(...new Array<number[]>(6).fill([1, tau]));
     const { real, pairs } = polynomialRoots(coefficients);
     expect(real.length + 2 * pairs.length).toBe(6);
     const again = product(
