@@ -1,0 +1,60 @@
+import { css } from 'lit';
+
+/** Styles of `nw-level-meter`. */
+export const levelMeterStyles = css`
+  :host {
+    display: block;
+    width: 150px;
+    min-width: 0;
+  }
+  .meter {
+    display: flex;
+    align-items: center;
+    gap: 6px;
+  }
+  .bar {
+    position: relative;
+    flex: 1;
+    height: 10px;
+    border-radius: 5px;
+    background: color-mix(in srgb, var(--nw-track) 22%, var(--nw-sheet));
+    overflow: hidden;
+  }
+  .level {
+    position: absolute;
+    inset: 0;
+    background: var(--nw-accent);
+    transform-origin: left;
+  }
+  .hold {
+    position: absolute;
+    inset-block: 0;
+    width: 2px;
+    margin-inline-start: -2px;
+    background: var(--nw-ink);
+  }
+  .over {
+    flex: none;
+    min-width: 34px;
+    padding: 0 5px;
+    border-radius: 4px;
+    border: 1px solid transparent;
+    color: transparent;
+    font-size: 12px;
+    font-weight: 620;
+    line-height: 16px;
+    text-align: center;
+  }
+  .over.lit {
+    color: var(--nw-caution);
+    border-color: currentColor;
+  }
+  @media (forced-colors: active) {
+    .bar {
+      border: 1px solid CanvasText;
+    }
+    .level {
+      background: Highlight;
+    }
+  }
+`;
