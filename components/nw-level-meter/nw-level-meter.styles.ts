@@ -38,16 +38,16 @@ export const levelMeterStyles = css`
     min-width: 34px;
     padding: 0 5px;
     border-radius: 4px;
-    border: 1px solid transparent;
-    color: transparent;
+    border: 1px solid currentColor;
+    color: var(--nw-caution);
+    visibility: hidden;
     font-size: 12px;
     font-weight: 620;
     line-height: 16px;
     text-align: center;
   }
   .over.lit {
-    color: var(--nw-caution);
-    border-color: currentColor;
+    visibility: visible;
   }
   @media (forced-colors: active) {
     .bar {

@@ -15,7 +15,8 @@ function leastLength(duration: Seconds): Seconds {
 /** A region with one edge moved, kept within the clip and no shorter than {@link SHORTEST_REGION}. */
 export function withEdge(region: Region, edge: RegionEdge, to: Seconds, duration: Seconds): Region {
   const least = leastLength(duration);
-  if (edge === 'start') return { ...region, start: Math.min(Math.max(to, 0), Math.max(region.end - least, 0)) };
+  if (edge === 'start')
+    return { ...region, start: Math.min(Math.max(to, 0), Math.max(region.end - least, 0)) };
   return { ...region, end: Math.max(Math.min(to, duration), Math.min(region.start + least, duration)) };
 }
 
