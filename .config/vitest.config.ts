@@ -12,7 +12,7 @@ export default defineConfig({
         test: {
           name: 'unit',
           environment: 'node',
-          include: ['tests/{reference,src}/**/*.test.ts', 'tests/*.test.ts'],
+          include: ['tests/{reference,src,demo-audio}/**/*.test.ts'],
           exclude: ['tests/**/*.browser.test.ts'],
           testTimeout: 60_000,
         },

@@ -73,7 +73,8 @@ export function pluck(out, rate, start, length, note) {
     const sample = averaged + (frame < burst.length ? burst[frame] * force : 0);
     ring[write % longest] = sample;
     write += 1;
-    const fade = frame >= length - release ? 0.5 + 0.5 * Math.cos((Math.PI * (frame - length + release)) / release) : 1;
+    const fade =
+      frame >= length - release ? 0.5 + 0.5 * Math.cos((Math.PI * (frame - length + release)) / release) : 1;
     out[start + frame] += fade * sample;
   }
 }

@@ -26,9 +26,14 @@ function ringingChords() {
     const begin = 0.05 + index * 1.58 + 0.01 * random();
     chord.forEach((note, string) => {
       const start = Math.round((begin + string * 0.014 + 0.002 * random()) * RATE);
-      const end = Math.round((Math.min(begin + 1.62, seconds - 0.02)) * RATE);
+      const end = Math.round(Math.min(begin + 1.62, seconds - 0.02) * RATE);
       pluck(out, RATE, start, end - start, {
-        frequency: hertz(note), decay: 5.5 - 0.4 * string, bright: 0.2, pick: 0.13, force: 0.8 + 0.12 * random(), seed: 1000 + 10 * index + string,
+        frequency: hertz(note),
+        decay: 5.5 - 0.4 * string,
+        bright: 0.2,
+        pick: 0.13,
+        force: 0.8 + 0.12 * random(),
+        seed: 1000 + 10 * index + string,
       });
     });
   });
@@ -41,8 +46,21 @@ function singleNotes() {
   const out = new Float64Array(seconds * RATE);
   const random = noise(202);
   const steps = [
-    [64, 0.5], [67, 0.5], [69, 1], [71, 0.5], [69, 0.5], [67, 0.75], [64, 0.25], [62, 0.5], [64, 1.5],
-    [71, 0.5], [74, 0.5], [76, 1], [74, 0.5], [71, 0.5], [69, 1.5],
+    [64, 0.5],
+    [67, 0.5],
+    [69, 1],
+    [71, 0.5],
+    [69, 0.5],
+    [67, 0.75],
+    [64, 0.25],
+    [62, 0.5],
+    [64, 1.5],
+    [71, 0.5],
+    [74, 0.5],
+    [76, 1],
+    [74, 0.5],
+    [71, 0.5],
+    [69, 1.5],
   ];
   const beat = 0.72;
   let time = 0.05;
@@ -57,8 +75,18 @@ function singleNotes() {
           return hertz(note - 2 * bend * bend + vibrato);
         }
       : hertz(note);
-    const frames = Math.min(Math.round((length + 0.015) * RATE), out.length - Math.round(0.02 * RATE) - start);
-    pluck(out, RATE, start, frames, { frequency, decay: 4, bright: 0.15, pick: 0.18, force: 0.82 + 0.1 * random(), seed: 2000 + index });
+    const frames = Math.min(
+      Math.round((length + 0.015) * RATE),
+      out.length - Math.round(0.02 * RATE) - start,
+    );
+    pluck(out, RATE, start, frames, {
+      frequency,
+      decay: 4,
+      bright: 0.15,
+      pick: 0.18,
+      force: 0.82 + 0.1 * random(),
+      seed: 2000 + index,
+    });
     time += length;
   });
   return out;
@@ -76,9 +104,19 @@ function dampedLows() {
     const accent = index % 4 === 0;
     const start = Math.round((0.05 + index * eighth + 0.003 * random()) * RATE);
     const length = Math.round((accent ? 0.19 : 0.16) * RATE);
-    for (const [offset, force] of accent ? [[0, 0.9], [7, 0.75]] : [[0, 0.82]]) {
+    for (const [offset, force] of accent
+      ? [
+          [0, 0.9],
+          [7, 0.75],
+        ]
+      : [[0, 0.82]]) {
       pluck(out, RATE, start, length, {
-        frequency: hertz(note + offset), decay: accent ? 0.7 : 0.34, bright: 0, pick: 0.09, force: force + 0.06 * random(), seed: 3000 + 3 * index + offset,
+        frequency: hertz(note + offset),
+        decay: accent ? 0.7 : 0.34,
+        bright: 0,
+        pick: 0.09,
+        force: force + 0.06 * random(),
+        seed: 3000 + 3 * index + offset,
       });
     }
   }

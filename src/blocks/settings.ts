@@ -1,7 +1,7 @@
 import { NotchworkError } from '../errors.ts';
 import { trackRatio } from '../parts/taper.ts';
 import type { Rotation, TrackRatio } from '../units.ts';
-import type { Block, BlockSettings, BlockValues, PotentiometerHalves } from './block.ts';
+import type { Block, BlockSettings, BlockValues, Neighbours, PotentiometerHalves } from './block.ts';
 
 function mapValues<In, Out>(
   record: Readonly<Record<string, In>>,
@@ -60,4 +60,47 @@ export function withKnob(settings: BlockSettings, knob: string, position: Rotati
 /** The same settings with one part's value changed. */
 export function withPart(settings: BlockSettings, part: string, value: number): BlockSettings {
   return { ...settings, parts: { ...settings.parts, [part]: value } };
+}
+
+/** No neighbours: enough to see which parts a block's choices use. */
+const ALONE: Neighbours = { before: undefined, after: undefined };
+
+/** Parts whose values a block's present wiring takes in, by name. */
+function usedParts(block: Block, settings: BlockSettings): ReadonlySet<string> {
+  const used = new Set<string>();
+  const reader = valuesOf(settings);
+  const spy: BlockValues = {
+    part: (name) => {
+      used.add(name);
+      return reader.part(name);
+    },
+    ratio: (knob) => {
+      used.add(need(block.knobs, knob, 'knob').part);
+      return reader.ratio(knob);
+    },
+    choice: reader.choice,
+  };
+  for (const { value } of block.elements(settings, ALONE)) {
+    if ('part' in value) used.add(value.part);
+    else if ('knob' in value) used.add(need(block.knobs, value.knob, 'knob').part);
+    else value.compute(spy);
+  }
+  return used;
+}
+
+const usedByChoices = new WeakMap<Block, WeakMap<object, ReadonlySet<string>>>();
+
+/** Whether a part does anything in the wiring that the block's choices give it. */
+export function isUsedPart(block: Block, settings: BlockSettings, part: string): boolean {
+  let byChoices = usedByChoices.get(block);
+  if (byChoices === undefined) {
+    byChoices = new WeakMap();
+    usedByChoices.set(block, byChoices);
+  }
+  let used = byChoices.get(settings.choices);
+  if (used === undefined) {
+    used = usedParts(block, settings);
+    byChoices.set(settings.choices, used);
+  }
+  return used.has(part);
 }

@@ -11,7 +11,13 @@ const EXTENSIBLE = 0xfffe;
 
 /** Names of codecs that a WAV file may hold but this reader does not decode. */
 const CODECS: Readonly<Record<number, string>> = {
-  2: 'ADPCM', 6: 'A-law', 7: 'µ-law', 0x11: 'IMA ADPCM', 0x50: 'MPEG', 0x55: 'MP3', 0x161: 'WMA',
+  2: 'ADPCM',
+  6: 'A-law',
+  7: 'µ-law',
+  17: 'IMA ADPCM',
+  80: 'MPEG',
+  85: 'MP3',
+  353: 'WMA',
 };
 
 function textAt(bytes: Uint8Array, offset: number, length: number): string {
@@ -78,7 +84,10 @@ function formatOf(view: DataView, chunk: Chunk): Format {
 }
 
 function unreadable(why: string): NotchworkError {
-  return new NotchworkError('clip-unreadable', `This WAV file cannot be read: ${why}. Save it again, or choose another.`);
+  return new NotchworkError(
+    'clip-unreadable',
+    `This WAV file cannot be read: ${why}. Save it again, or choose another.`,
+  );
 }
 
 type SampleReader = (offset: number) => number;
@@ -126,7 +135,8 @@ export function readWav(bytes: Uint8Array, options: WavReadOptions = {}): Clip {
   if (format.channels < 1 || format.channels > 8) throw unreadable(`it claims ${format.channels} channels`);
   if (format.sampleRate === 0) throw unreadable('it claims a sample rate of 0');
   const read = sampleReader(view, format);
-  if (data === undefined) throw new NotchworkError('clip-empty', 'This WAV file has no samples in it. Choose another.');
+  if (data === undefined)
+    throw new NotchworkError('clip-empty', 'This WAV file has no samples in it. Choose another.');
 
   const width = format.bits / 8;
   const step = width * format.channels;

@@ -50,7 +50,16 @@ export const GRID_FREQUENCIES: readonly Hertz[] = [10, 100, 1000, 10_000].flatMa
 
 /** What each quantity is measured in, and how its axis is divided. */
 export const QUANTITIES: Readonly<
-  Record<PlotQuantity, { readonly name: string; readonly unit: string; readonly step: number; readonly least: number; readonly digits: number }>
+  Record<
+    PlotQuantity,
+    {
+      readonly name: string;
+      readonly unit: string;
+      readonly step: number;
+      readonly least: number;
+      readonly digits: number;
+    }
+  >
 > = {
   magnitude: { name: 'Level', unit: 'dB', step: 6, least: 24, digits: 1 },
   phase: { name: 'Phase', unit: '°', step: 45, least: 90, digits: 0 },
@@ -99,7 +108,10 @@ export function axisTicks(quantity: PlotQuantity, { min, max }: AxisRange): read
   let spacing = step;
   while ((max - min) / spacing > 8) spacing *= 2;
   const first = Math.ceil(min / spacing) * spacing;
-  return Array.from({ length: Math.floor((max - first) / spacing) + 1 }, (_, index) => first + index * spacing);
+  return Array.from(
+    { length: Math.floor((max - first) / spacing) + 1 },
+    (_, index) => first + index * spacing,
+  );
 }
 
 /** A curve's value at a frequency, interpolated along the logarithmic axis; NaN outside it. */
@@ -128,6 +140,7 @@ export function plotNumber(value: number, quantity: PlotQuantity, signed = false
 
 /** A frequency as people say it: "560 Hz", "1.25 kHz". */
 export function frequencyText(frequency: Hertz): string {
-  const digits = frequency >= 1000 ? Number((frequency / 1000).toPrecision(3)) : Number(frequency.toPrecision(3));
+  const digits =
+    frequency >= 1000 ? Number((frequency / 1000).toPrecision(3)) : Number(frequency.toPrecision(3));
   return `${digits}\u202f${frequency >= 1000 ? 'kHz' : 'Hz'}`;
 }

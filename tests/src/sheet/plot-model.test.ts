@@ -1,9 +1,22 @@
 import { describe, expect, it } from 'vitest';
-import { axisRange, axisTicks, frequencyText, type PlotCurve, plotNumber, valueAt } from '../../../src/sheet/plot-model.ts';
+import {
+  axisRange,
+  axisTicks,
+  frequencyText,
+  type PlotCurve,
+  plotNumber,
+  valueAt,
+} from '../../../src/sheet/plot-model.ts';
 
 const curve = (values: number[], frequencies = values.map((_, index) => 10 * 2 ** index)): PlotCurve => ({
-  id: 'x', letter: 'A', label: 'x', colour: 'a', dash: [], strength: 'strong',
-  frequencies: Float64Array.from(frequencies), values: Float64Array.from(values),
+  id: 'x',
+  letter: 'A',
+  label: 'x',
+  colour: 'a',
+  dash: [],
+  strength: 'strong',
+  frequencies: Float64Array.from(frequencies),
+  values: Float64Array.from(values),
 });
 
 describe('plot model', () => {
@@ -33,12 +46,27 @@ describe('plot model', () => {
     const line = curve([0, -6], [100, 400]);
     expect(valueAt(line, 200)).toBeCloseTo(-3, 12);
     expect([valueAt(line, 100), valueAt(line, 400)]).toEqual([0, -6]);
-    expect([valueAt(line, 99), valueAt(line, 401), valueAt(curve([]), 100)]).toEqual([Number.NaN, Number.NaN, Number.NaN]);
+    expect([valueAt(line, 99), valueAt(line, 401), valueAt(curve([]), 100)]).toEqual([
+      Number.NaN,
+      Number.NaN,
+      Number.NaN,
+    ]);
   });
 
   it('writes numbers with a real minus sign and no minus zero', () => {
-    expect([plotNumber(-9.84, 'magnitude'), plotNumber(-0.01, 'magnitude'), plotNumber(4.66, 'magnitude', true)]).toEqual(['−9.8', '0.0', '+4.7']);
-    expect([plotNumber(Number.NaN, 'phase'), plotNumber(Number.NEGATIVE_INFINITY, 'magnitude')]).toEqual(['–', '−∞']);
-    expect([frequencyText(560), frequencyText(1250), frequencyText(31.5)]).toEqual(['560\u202fHz', '1.25\u202fkHz', '31.5\u202fHz']);
+    expect([
+      plotNumber(-9.84, 'magnitude'),
+      plotNumber(-0.01, 'magnitude'),
+      plotNumber(4.66, 'magnitude', true),
+    ]).toEqual(['−9.8', '0.0', '+4.7']);
+    expect([plotNumber(Number.NaN, 'phase'), plotNumber(Number.NEGATIVE_INFINITY, 'magnitude')]).toEqual([
+      '–',
+      '−∞',
+    ]);
+    expect([frequencyText(560), frequencyText(1250), frequencyText(31.5)]).toEqual([
+      '560\u202fHz',
+      '1.25\u202fkHz',
+      '31.5\u202fHz',
+    ]);
   });
 });

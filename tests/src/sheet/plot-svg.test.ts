@@ -3,15 +3,31 @@ import type { PlotCurve } from '../../../src/sheet/plot-model.ts';
 import { plotSvg } from '../../../src/sheet/plot-svg.ts';
 
 const curve: PlotCurve = {
-  id: 'a', letter: 'A', label: 'Stock & <odd>', colour: 'a', dash: [9, 5], strength: 'strong',
-  frequencies: Float64Array.of(5, 10, 1000, 40_000, 50_000), values: Float64Array.of(0, -12, 0, -24, 0),
+  id: 'a',
+  letter: 'A',
+  label: 'Stock & <odd>',
+  colour: 'a',
+  dash: [9, 5],
+  strength: 'strong',
+  frequencies: Float64Array.of(5, 10, 1000, 40_000, 50_000),
+  values: Float64Array.of(0, -12, 0, -24, 0),
 };
 
 describe('plot as SVG', () => {
-  const text = plotSvg([curve], { title: 'Attic <amplifier>', quantity: 'magnitude', reference: '0 dB is the driver’s unloaded output' });
+  const text = plotSvg([curve], {
+    title: 'Attic <amplifier>',
+    quantity: 'magnitude',
+    reference: '0 dB is the driver’s unloaded output',
+  });
 
   it('is the same text for the same curves', () => {
-    expect(plotSvg([curve], { title: 'Attic <amplifier>', quantity: 'magnitude', reference: '0 dB is the driver’s unloaded output' })).toBe(text);
+    expect(
+      plotSvg([curve], {
+        title: 'Attic <amplifier>',
+        quantity: 'magnitude',
+        reference: '0 dB is the driver’s unloaded output',
+      }),
+    ).toBe(text);
   });
 
   it('escapes what was typed', () => {
@@ -26,7 +42,9 @@ describe('plot as SVG', () => {
   });
 
   it('says in words what it shows', () => {
-    expect(text).toMatch(/<desc[^>]*>Level in dB from 10 Hz to 40 kHz\. A Stock[^<]*0\.0 dB at 1 kHz\.<\/desc>/);
+    expect(text).toMatch(
+      /<desc[^>]*>Level in dB from 10 Hz to 40 kHz\. A Stock[^<]*0\.0 dB at 1 kHz\.<\/desc>/,
+    );
   });
 
   it('leaves out what is not finite', () => {
