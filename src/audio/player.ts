@@ -40,6 +40,8 @@ export class Player {
   #voice: Voice | undefined;
   /** The present voice and those that still fade. */
   readonly #voices = new Set<Voice>();
+  /** When the last stop begins to be heard; a start before it would add up with what still plays. */
+  #releasedAt: Seconds = 0;
   /** Where to start next, in seconds of the clip. */
   #place: Seconds = 0;
 
@@ -80,7 +82,7 @@ export class Player {
       );
     }
     if (this.#voice !== undefined) return;
-    const at = this.#onGrid(Math.max(this.#parts.clock.now + LEAD, earliest));
+    const at = this.#onGrid(Math.max(this.#parts.clock.now + LEAD, earliest, this.#releasedAt));
     this.#start(at, this.#inside(this.#place));
   }
 
@@ -88,7 +90,8 @@ export class Player {
   stop(): void {
     if (this.#voice === undefined) return;
     this.#place = this.position();
-    this.#voice.stop(this.#voice.stopsAt);
+    this.#releasedAt = this.#onGrid(this.#voice.stopsAt);
+    this.#voice.stop(this.#releasedAt);
     this.#voice = undefined;
   }
 
