@@ -24,7 +24,8 @@ function emptyGroup(): RootGroup {
  * section well conditioned: poles that crowd near z = 1 within one section cost digits.
  */
 function dealPoles(poles: PolynomialRoots, count: number): RootGroup[] {
-  const groups = Array.from({ length: count }, emptyGroup);
+  const groups: RootGroup[] = [];
+  for (let index = 0; index < count; index++) groups.push(emptyGroup());
   poles.pairs.forEach((pair, index) => {
     const group = groups[index]!;
     const place = Math.log(pair.re * pair.re + pair.im * pair.im) / 2;

@@ -24,7 +24,7 @@ function mayBeRealRooted(coefficients: Float64Array, degree: number): boolean {
 }
 
 /** One sweep of the Ehrlich–Aberth iteration on the real line; the largest relative step taken. */
-function sweep(coefficients: Float64Array, degree: number, roots: Float64Array): number {
+function sweep(coefficients: Float64Array, degree: number, roots: number[]): number {
   let largest = 0;
   for (let index = 0; index < degree; index++) {
     const root = roots[index]!;
@@ -48,7 +48,7 @@ function sweep(coefficients: Float64Array, degree: number, roots: Float64Array):
 }
 
 /** One Weierstrass correction with compensated values; the largest relative step taken. */
-function polish(coefficients: Float64Array, degree: number, roots: Float64Array): number {
+function polish(coefficients: Float64Array, degree: number, roots: number[]): number {
   let largest = 0;
   for (let index = 0; index < degree; index++) {
     const root = roots[index]!;
@@ -64,7 +64,7 @@ function polish(coefficients: Float64Array, degree: number, roots: Float64Array)
   return largest;
 }
 
-function wellApart(roots: Float64Array): boolean {
+function wellApart(roots: readonly number[]): boolean {
   for (let index = 1; index < roots.length; index++) {
     if (!(roots[index]! < roots[index - 1]! * (1 + CLUSTER))) return false;
   }
@@ -80,11 +80,11 @@ function wellApart(roots: Float64Array): boolean {
  *
  * @param coefficients ascending powers, neither end zero, scaled so that powers neither overflow nor vanish.
  */
-export function realRoots(coefficients: Float64Array, degree: number): Float64Array | undefined {
+export function realRoots(coefficients: Float64Array, degree: number): number[] | undefined {
   if (!mayBeRealRooted(coefficients, degree)) return undefined;
-  const roots = new Float64Array(degree);
+  const roots: number[] = [];
   for (let power = 1; power <= degree; power++) {
-    roots[power - 1] = -coefficients[power - 1]! / coefficients[power]!;
+    roots.push(-coefficients[power - 1]! / coefficients[power]!);
   }
   let iteration = 0;
   let step = Number.POSITIVE_INFINITY;

@@ -56,7 +56,7 @@ function structureOfScaled(coefficients: Float64Array, degree: number): RootStru
   if (degree === 1) return { singles: [-coefficients[0]! / coefficients[1]!], couples: [] };
   if (degree === 2) return quadratic(coefficients[0]!, coefficients[1]!, coefficients[2]!);
   const real = realRoots(coefficients, degree);
-  if (real !== undefined) return { singles: [...real], couples: [] };
+  if (real !== undefined) return { singles: real, couples: [] };
   const rough = structureOf(complexRoots(coefficients, degree));
   return mergeMultipleRoots(coefficients, polishRoots(coefficients, degree, rough));
 }
@@ -79,6 +79,26 @@ function assertUsable(coefficients: ArrayLike<number>, degree: number): void {
   }
   if (degree < 0) {
     throw new NotchworkError('filter-invalid', 'A polynomial whose coefficients are all 0 has no roots.');
+  }
+}
+
+function isAscending(roots: readonly number[]): boolean {
+  for (let index = 1; index < roots.length; index++) {
+    if (!(Math.abs(roots[index]!) >= Math.abs(roots[index - 1]!))) return false;
+  }
+  return true;
+}
+
+function assertFound(real: readonly number[], pairs: readonly Complex[], degree: number): void {
+  let sum = 0;
+  for (const root of real) sum += root * 0;
+  for (const { re, im } of pairs) sum += re * 0 + im * 0;
+  if (sum !== 0) {
+    // 0 times anything finite is 0; times infinity or NaN it is NaN.
+    throw new NotchworkError(
+      'filter-invalid',
+      `The coefficients of a polynomial of degree ${degree} lie too far apart in size to find its roots.`,
+    );
   }
 }
 
@@ -117,17 +137,14 @@ export function polynomialRoots(coefficients: ArrayLike<number>): PolynomialRoot
   const decline = Math.log2(Math.abs(coefficients[low]!)) - Math.log2(Math.abs(coefficients[high]!));
   const unit = 2 ** Math.round(decline / degree);
   const { singles, couples } = structureOfScaled(rescale(coefficients, low, high, unit), degree);
-  const real = singles.map((root) => root * unit);
+  const real: number[] = [];
   const pairs: Complex[] = [];
-  for (const couple of couples) split(couple, real, pairs, unit);
   for (let count = 0; count < low; count++) real.push(0);
-  real.sort((a, b) => Math.abs(a) - Math.abs(b));
-  pairs.sort((a, b) => Math.hypot(a.re, a.im) - Math.hypot(b.re, b.im));
-  if (!real.every(Number.isFinite) || !pairs.every(({ re, im }) => Number.isFinite(re + im))) {
-    throw new NotchworkError(
-      'filter-invalid',
-      `The coefficients of a polynomial of degree ${degree} lie too far apart in size to find its roots.`,
-    );
-  }
+  for (const root of singles) real.push(root * unit);
+  for (const couple of couples) split(couple, real, pairs, unit);
+  // Those of the search on the real line come in order already.
+  if (!isAscending(real)) real.sort((a, b) => Math.abs(a) - Math.abs(b));
+  if (pairs.length > 1) pairs.sort((a, b) => Math.hypot(a.re, a.im) - Math.hypot(b.re, b.im));
+  assertFound(real, pairs, degree);
   return { real, pairs };
 }

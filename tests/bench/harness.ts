@@ -19,8 +19,8 @@ export type Rows = () => readonly Row[] | Promise<readonly Row[]>;
 export type Work = () => number;
 
 const BATCH_MILLISECONDS = 4; // long against the clock's step, short against the scheduler's
-const BATCHES = 61; // odd, so that the median is one of them
-const WARMING_MILLISECONDS = 150;
+const BATCHES = 101; // odd, so that the median is one of them
+const WARMING_MILLISECONDS = 300;
 
 /** Everything computed flows into this; it is printed by no one. */
 let sink = 0;
@@ -49,22 +49,18 @@ function median(values: readonly number[]): number {
   return [...values].sort((a, b) => a - b)[values.length >> 1]!;
 }
 
-/** Milliseconds one call of each takes: medians over batches that alternate, so that both see the same machine. */
-function timeTogether(first: Work, second: Work): [number, number] {
-  const firstCount = repetitionsOf(first);
-  const secondCount = repetitionsOf(second);
-  const firstTimes: number[] = [];
-  const secondTimes: number[] = [];
+/**
+ * How many times as long as `base` the work takes: the median over pairs of batches run one right after
+ * the other, so that whatever else the machine does in those milliseconds meets both.
+ */
+export function ratio(work: Work, base: Work): number {
+  const count = repetitionsOf(work);
+  const baseCount = repetitionsOf(base);
+  const ratios: number[] = [];
   for (let batch = 0; batch < BATCHES; batch++) {
-    firstTimes.push(runFor(first, firstCount) / firstCount);
-    secondTimes.push(runFor(second, secondCount) / secondCount);
+    const time = runFor(work, count) / count;
+    ratios.push(time / (runFor(base, baseCount) / baseCount));
   }
   if (!Number.isFinite(sink)) sink = 0;
-  return [median(firstTimes), median(secondTimes)];
-}
-
-/** How many times as long as `base` the work takes. */
-export function ratio(work: Work, base: Work): number {
-  const [time, baseTime] = timeTogether(work, base);
-  return time / baseTime;
+  return median(ratios);
 }
