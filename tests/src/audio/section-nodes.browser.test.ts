@@ -4,7 +4,9 @@ import { buildSections, checkSections } from '../../../src/audio/section-nodes.t
 import { NotchworkError } from '../../../src/errors.ts';
 import { bilinear } from '../../../src/filter/bilinear.ts';
 import type { AnalogueSection, DigitalSection } from '../../../src/filter/section.ts';
-import { toneSections } from './line-sections.ts';
+import { magnitudeAt } from '../../../src/transfer-function.ts';
+import type { RadiansPerSecond } from '../../../src/units.ts';
+import { presenceTransfer, sectionsOf, toneSections, toneTransfer } from './line-sections.ts';
 
 const RATES = [44_100, 48_000, 96_000, 192_000];
 
@@ -94,6 +96,34 @@ describe('sections as nodes', () => {
         );
       }
     });
+  }
+
+  const positions: [string, Record<string, number>, number][] = [
+    ['all at 0', { treble: 0, bass: 0, middle: 0 }, 0],
+    ['all at 10', { treble: 1, bass: 1, middle: 1 }, 1],
+    ['treble at 10, the rest at 0', { treble: 1, bass: 0, middle: 0 }, 0.5],
+    // Drawn once with a die.
+    ['anywhere', { treble: 0.37, bass: 0.81, middle: 0.14 }, 0.73],
+  ];
+  for (const sampleRate of RATES) {
+    for (const [name, knobs, presence] of positions) {
+      it(`play the line at ${sampleRate} Hz as the circuit says, within 0.001 dB: ${name}`, async () => {
+        const transfers = [toneTransfer(knobs), presenceTransfer(presence)];
+        const sections = transfers.flatMap((transfer) => sectionsOf(transfer, sampleRate));
+        const response = await impulseResponse(sections, sampleRate);
+        for (const frequency of frequencies()) {
+          const omega = (2 * sampleRate * Math.tan((Math.PI * frequency) / sampleRate)) as RadiansPerSecond;
+          const expected = transfers.reduce(
+            (sum, transfer) => sum + 20 * Math.log10(magnitudeAt(transfer, omega)),
+            0,
+          );
+          expect(renderedMagnitude(response, frequency, sampleRate), `${frequency} Hz`).to.be.closeTo(
+            expected,
+            0.001,
+          );
+        }
+      });
+    }
   }
 
   it('filter every channel for itself', async () => {
