@@ -18,7 +18,7 @@ export interface PlayerParts {
 }
 
 /** The shortest region: below it a loop is a tone of its own, and no room is left for the fades. */
-export const SHORTEST_REGION: Seconds = 0.02;
+const SHORTEST_REGION: Seconds = 0.02;
 
 interface Frames {
   readonly start: number;

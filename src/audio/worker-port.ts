@@ -2,7 +2,7 @@ import type { ErrorCode } from '../errors.ts';
 import { NotchworkError } from '../errors.ts';
 
 /** What a worker sends back: an answer, or an error that survives the way between threads. */
-export type WorkerAnswer<Answer> =
+type WorkerAnswer<Answer> =
   | { readonly answer: Answer }
   | { readonly problem: { readonly code: ErrorCode | undefined; readonly message: string } };
 
