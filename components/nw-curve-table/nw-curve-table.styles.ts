@@ -4,7 +4,10 @@ import { css } from 'lit';
 export const curveTableStyles = css`
   :host {
     display: block;
-    overflow: auto;
+  }
+  .scroll {
+    overflow-x: auto;
+    border-radius: 4px;
   }
   table {
     border-collapse: collapse;

@@ -1,16 +1,19 @@
 import { html, LitElement, type TemplateResult } from 'lit';
 import { customElement, property } from 'lit/decorators.js';
-import { frequencyText, type PlotCurve, type PlotQuantity, plotNumber, QUANTITIES, valueAt } from '../../src/sheet/plot-model.ts';
+import {
+  frequencyText,
+  type PlotCurve,
+  type PlotQuantity,
+  plotNumber,
+  QUANTITIES,
+  valueAt,
+} from '../../src/sheet/plot-model.ts';
+import { preferredFrequencies } from '../../src/sheet/preferred-frequencies.ts';
 import { baseStyles } from '../theme.ts';
 import { curveTableStyles } from './nw-curve-table.styles.ts';
 
-/** Third-octave preferred frequencies of ISO 266 (from memory), 20 Hz to 20 kHz. */
-const PREFERRED: readonly number[] = [20, 25, 31.5, 40, 50, 63, 80, 100, 125, 160]
-  .flatMap((value) => [value, value * 10, value * 100])
-  .filter((value, index, all) => all.indexOf(value) === index)
-  .concat([16_000, 20_000])
-  .filter((value, index, all) => value <= 20_000 && all.indexOf(value) === index)
-  .sort((first, second) => first - second);
+/** What is listed: the audible part of the plot. */
+const LISTED = preferredFrequencies(20, 20_000);
 
 /** The curves in numbers, for those who cannot see the plot and those who want the figures. */
 @customElement('nw-curve-table')
@@ -26,9 +29,9 @@ export class NwCurveTable extends LitElement {
   override render(): TemplateResult {
     const { name, unit } = QUANTITIES[this.quantity];
     const curves = this.curves.filter((curve) => curve.letter !== '');
-    return html`<table>
+    return html`<div class="scroll" tabindex="0" role="region" aria-label="Table of the curves"><table>
       <caption>
-        ${name} in ${unit} at the preferred frequencies of ISO 266
+        ${name} in ${unit === '°' ? 'degrees' : unit} at the preferred frequencies of ISO 266
       </caption>
       <thead>
         <tr>
@@ -37,14 +40,14 @@ export class NwCurveTable extends LitElement {
         </tr>
       </thead>
       <tbody>
-        ${PREFERRED.map(
+        ${LISTED.map(
           (frequency) => html`<tr>
             <th scope="row">${frequencyText(frequency)}</th>
             ${curves.map((curve) => html`<td>${plotNumber(valueAt(curve, frequency), this.quantity)}</td>`)}
           </tr>`,
         )}
       </tbody>
-    </table>`;
+    </table></div>`;
   }
 }
 

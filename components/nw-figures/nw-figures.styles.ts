@@ -9,8 +9,8 @@ export const figuresStyles = css`
   dl {
     margin: 0;
     display: grid;
-    gap: 12px 20px;
-    grid-template-columns: repeat(auto-fill, minmax(130px, 1fr));
+    gap: 12px 16px;
+    grid-template-columns: repeat(auto-fill, minmax(112px, 1fr));
   }
   dt,
   .reference {

@@ -35,19 +35,19 @@ export const levelMeterStyles = css`
   }
   .over {
     flex: none;
-    min-width: 34px;
-    padding: 0 5px;
-    border-radius: 4px;
-    border: 1px solid currentColor;
-    color: var(--nw-caution);
-    visibility: hidden;
+    width: 14px;
+    height: 14px;
+    border: 1px solid var(--nw-track);
+    border-radius: 50%;
     font-size: 12px;
     font-weight: 620;
-    line-height: 16px;
+    line-height: 12px;
     text-align: center;
   }
   .over.lit {
-    visibility: visible;
+    border-color: var(--nw-caution);
+    background: var(--nw-caution);
+    color: var(--nw-sheet);
   }
   @media (forced-colors: active) {
     .bar {

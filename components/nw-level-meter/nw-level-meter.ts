@@ -51,13 +51,17 @@ export class NwLevelMeter extends LitElement {
       aria-valuemax=${LOUDEST}
       aria-valuenow=${Math.round(QUIETEST + level * (LOUDEST - QUIETEST))}
       aria-valuetext="${spoken(this.level)}, peak ${spoken(this.hold)}${this.over ? ', cut to stay under full scale' : ''}"
-      title="Level in dB under full scale, with the highest of the last seconds"
+      title=${
+        this.over
+          ? 'Something was cut to stay under full scale; turn it down a little'
+          : 'Level from −48 dB to full scale, with the highest of the last seconds'
+      }
     >
       <div class="bar" part="bar">
         <div class="level" style="transform:scaleX(${level.toFixed(4)})"></div>
         <div class="hold" style="left:${(hold * 100).toFixed(2)}%" ?hidden=${hold === 0}></div>
       </div>
-      <span class="over ${this.over ? 'lit' : ''}" aria-hidden="true">over</span>
+      <span class="over ${this.over ? 'lit' : ''}" aria-hidden="true">${this.over ? '!' : ''}</span>
     </div>`;
   }
 }

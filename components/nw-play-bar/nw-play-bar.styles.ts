@@ -15,10 +15,14 @@ export const playBarStyles = css`
     display: grid;
     gap: 4px;
   }
+  .notes > nw-notice,
+  ::slotted([slot='messages']) {
+    margin-block-end: 6px;
+  }
   .row {
     display: grid;
-    grid-template-columns: auto auto minmax(120px, 1fr) auto auto auto;
-    grid-template-areas: 'play clip wave toggles words meter';
+    grid-template-columns: auto auto minmax(120px, 1fr) auto auto;
+    grid-template-areas: 'play clip wave toggles side';
     align-items: center;
     gap: 6px 16px;
   }
@@ -54,6 +58,9 @@ export const playBarStyles = css`
     gap: 2px;
     justify-items: start;
     min-width: 0;
+  }
+  nw-menu {
+    white-space: nowrap;
   }
   .time {
     padding-inline-start: 1px;
@@ -107,6 +114,12 @@ export const playBarStyles = css`
     visibility: hidden;
     font-weight: 550;
   }
+  .side {
+    grid-area: side;
+    display: flex;
+    align-items: center;
+    gap: 16px;
+  }
   .words {
     grid-area: words;
     text-align: end;
@@ -117,16 +130,15 @@ export const playBarStyles = css`
     grid-area: meter;
     width: 170px;
   }
-  @container (max-width: 1000px) {
-    .row {
-      grid-template-columns: auto auto minmax(120px, 1fr) auto auto;
-      grid-template-areas: 'play clip wave toggles meter' 'words words words words words';
-    }
-    .words {
-      max-width: none;
+  @container (max-width: 1240px) {
+    .side {
+      flex-direction: column;
+      align-items: stretch;
+      gap: 4px;
+      min-width: 140px;
     }
     nw-level-meter {
-      width: 130px;
+      width: 100%;
     }
   }
   @container (max-width: 700px) {
@@ -134,19 +146,26 @@ export const playBarStyles = css`
       padding: 8px 12px;
     }
     .row {
-      grid-template-columns: auto minmax(0, 1fr) auto;
-      grid-template-areas: 'play clip meter' 'wave wave toggles' 'words words words';
-      gap: 6px 12px;
+      grid-template-columns: auto minmax(0, 1fr) auto auto;
+      grid-template-areas:
+        'play clip clip meter'
+        'wave wave toggles toggles'
+        'words words words words';
+      gap: 8px 10px;
     }
     .play {
       width: 48px;
       height: 48px;
     }
+    .side {
+      display: contents;
+    }
     .words {
+      max-width: none;
       text-align: start;
     }
     nw-level-meter {
-      width: clamp(84px, 28cqi, 150px);
+      width: clamp(60px, 20cqi, 150px);
     }
     nw-waveform {
       height: 44px;

@@ -1,5 +1,5 @@
 import { html, LitElement, nothing, type TemplateResult } from 'lit';
-import { customElement, property, query } from 'lit/decorators.js';
+import { customElement, property, query, state } from 'lit/decorators.js';
 import type { Region } from '../../src/audio/engine-types.ts';
 import type { Overview } from '../../src/clip/overview.ts';
 import type { Decibels, Seconds } from '../../src/units.ts';
@@ -19,17 +19,18 @@ const OPEN_FILE = 'open-file';
 /** What browsers decode; the extensions are for systems that know no media types. */
 const ACCEPTED = 'audio/*,.wav,.flac,.mp3,.ogg,.oga,.m4a';
 
-/** Longest title shown on the button; the whole of it stands in its tooltip. */
-const LONGEST_TITLE = 26;
+/** Widths under this are a phone's; the same number stands in the styles. */
+const NARROW = 700;
 
-function shortened(title: string): string {
+/** Longest title shown on the button, in letters; the whole of it stands in its tooltip. */
+const LONGEST_TITLE = 26;
+const LONGEST_NARROW_TITLE = 14;
+
+function shortened(title: string, most: number): string {
   const letters = [...title];
-  return letters.length <= LONGEST_TITLE
-    ? title
-    : `${letters
-        .slice(0, LONGEST_TITLE - 1)
-        .join('')
-        .trimEnd()}…`;
+  if (letters.length <= most) return title;
+  const kept = letters.slice(0, most - 1).join('');
+  return `${kept.trimEnd()}…`;
 }
 
 /** The picture on the play button: a triangle, or a square while it plays. */
@@ -58,6 +59,8 @@ export class NwPlayBar extends LitElement {
   static override styles = [baseStyles, playBarStyles];
 
   @query('input[type=file]') private fileField!: HTMLInputElement;
+
+  @state() private isNarrow = false;
 
   /** Whether it plays. */
   @property({ type: Boolean }) playing = false;
@@ -100,6 +103,20 @@ export class NwPlayBar extends LitElement {
 
   /** Whether to show the note about hearing. */
   @property({ type: Boolean }) caution = false;
+
+  readonly #widthObserver = new ResizeObserver(([entry]) => {
+    this.isNarrow = (entry?.contentRect.width ?? Number.POSITIVE_INFINITY) <= NARROW;
+  });
+
+  override connectedCallback(): void {
+    super.connectedCallback();
+    this.#widthObserver.observe(this);
+  }
+
+  override disconnectedCallback(): void {
+    super.disconnectedCallback();
+    this.#widthObserver.disconnect();
+  }
 
   get #canPlay(): boolean {
     return this.duration > 0 && this.loading === undefined;
@@ -178,7 +195,7 @@ export class NwPlayBar extends LitElement {
   override render(): TemplateResult {
     const items: readonly MenuItem[] = [
       ...this.clips,
-      { id: OPEN_FILE, label: 'Open a recording…', note: 'WAV, FLAC, MP3, OGG or M4A; up to 20 minutes' },
+      { id: OPEN_FILE, label: 'Open a recording…', note: 'WAV, FLAC, MP3, OGG, M4A' },
     ];
     return html`<section class="bar" aria-label="Clip and playing">
       <div class="notes">
@@ -206,7 +223,7 @@ export class NwPlayBar extends LitElement {
           <nw-menu
             upwards
             title=${this.clipTitle}
-            label=${shortened(this.clipTitle) || 'Choose a clip'}
+            label=${shortened(this.clipTitle, this.isNarrow ? LONGEST_NARROW_TITLE : LONGEST_TITLE) || 'Choose a clip'}
             .items=${items}
             @nw-choose=${this.handleChoice}
           ></nw-menu>
@@ -219,8 +236,10 @@ export class NwPlayBar extends LitElement {
           ${this.#renderToggle('Loop', 'Start over at the end of the part that plays', this.loop, this.handleLoop)}
           ${this.#renderToggle('Bypass', 'Hear the clip without the line', this.bypass, this.handleBypass)}
         </div>
-        <div class="words"><slot></slot></div>
-        <nw-level-meter .level=${this.level} .hold=${this.hold} .over=${this.over}></nw-level-meter>
+        <div class="side">
+          <div class="words"><slot></slot></div>
+          <nw-level-meter .level=${this.level} .hold=${this.hold} .over=${this.over}></nw-level-meter>
+        </div>
       </div>
       <input type="file" hidden accept=${ACCEPTED} aria-label="A recording of your own" @change=${this.handleFile} />
     </section>`;

@@ -11,18 +11,18 @@ export const plotStyles = css`
     height: 100%;
     min-height: inherit;
     touch-action: pan-y;
+    user-select: none;
     cursor: crosshair;
-    border-radius: 6px;
   }
-  .canvas {
+  .canvas,
+  .cursor {
     position: absolute;
     inset: 0;
   }
-  .unit {
-    position: absolute;
-    inset: 0 auto auto 8px;
-    font-size: 12px;
-    color: var(--nw-ink-soft);
-    pointer-events: none;
+  .cursor {
+    border-radius: 6px;
+  }
+  .cursor:focus-visible {
+    outline-offset: -2px;
   }
 `;

@@ -17,7 +17,11 @@ export async function rasterise(svgText: string, scale: number): Promise<Blob> {
     canvas.height = image.naturalHeight * scale;
     canvas.getContext('2d')?.drawImage(image, 0, 0, canvas.width, canvas.height);
     const blob = await new Promise<Blob | null>((resolve) => canvas.toBlob(resolve, 'image/png'));
-    if (blob === null) throw new NotchworkError('storage-failed', 'This browser could not make the picture; save the SVG instead.');
+    if (blob === null)
+      throw new NotchworkError(
+        'storage-failed',
+        'This browser could not make the picture; save the SVG instead.',
+      );
     return blob;
   } finally {
     URL.revokeObjectURL(url);
