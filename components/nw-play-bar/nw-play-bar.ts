@@ -138,7 +138,7 @@ export class NwPlayBar extends LitElement {
   private handleDismiss(event: Event): void {
     event.stopPropagation();
     this.caution = false;
-    this.dispatchEvent(new CustomEvent('nw-hearing-read', { bubbles: true, composed: true }));
+    send(this, 'nw-hearing-read', undefined);
   }
 
   private handleLoop(): void {
@@ -247,9 +247,6 @@ export class NwPlayBar extends LitElement {
 }
 
 declare global {
-  interface HTMLElementEventMap {
-    'nw-hearing-read': CustomEvent<undefined>;
-  }
   interface HTMLElementTagNameMap {
     'nw-play-bar': NwPlayBar;
   }

@@ -16,11 +16,16 @@ const COLUMNS = 1000;
 const CLICK_SLACK = 4;
 const EDGES: readonly RegionEdge[] = ['start', 'end'];
 
-/** What the pointer is doing: moving one edge, or drawing a new region from a place. */
-type Drag = { readonly pointer: number; readonly x: number } & (
-  | { readonly edge: RegionEdge }
-  | { readonly edge?: never; readonly from: Seconds; readonly drawn: boolean }
-);
+/** What the pointer is doing: moving one edge, or pressing a place from which a new region may be drawn. */
+interface Drag {
+  readonly pointer: number;
+  /** Where it came down, in the window and in the clip. */
+  readonly x: number;
+  readonly from: Seconds;
+  /** The region as it was; the owner may follow every move with the property. */
+  readonly before: Region;
+  readonly edge: RegionEdge | undefined;
+}
 
 /**
  * A clip as a waveform, with the part of it that plays and the place that is heard.
@@ -95,28 +100,29 @@ export class NwWaveform extends LitElement {
 
   private handlePointerDown(event: PointerEvent): void {
     if (event.button !== 0 || this.duration <= 0 || this.#drag !== undefined) return;
-    const edge = EDGES.find((name) => (event.target as Element).classList.contains(name));
     this.stage.setPointerCapture(event.pointerId);
-    const drag = { pointer: event.pointerId, x: event.clientX };
-    this.#drag = edge ? { ...drag, edge } : { ...drag, from: this.#secondsAt(event.clientX), drawn: false };
+    this.#drag = {
+      pointer: event.pointerId,
+      x: event.clientX,
+      from: this.#secondsAt(event.clientX),
+      before: this.#shown,
+      edge: EDGES.find((name) => (event.target as Element).classList.contains(name)),
+    };
   }
 
   private handlePointerMove(event: PointerEvent): void {
     const drag = this.#drag;
     if (drag?.pointer !== event.pointerId) return;
-    const moved = Math.abs(event.clientX - drag.x) >= CLICK_SLACK;
-    if (drag.edge !== undefined) {
-      // Counted from the edge, not from where in its grip the finger came down.
-      if (this.dragged === undefined && !moved) return;
-      this.tagged = drag.edge;
-      const from = (this.region ?? { start: 0, end: this.duration })[drag.edge];
-      const to = from + this.#secondsAt(event.clientX) - this.#secondsAt(drag.x);
-      this.#setRegion(withEdge(this.#shown, drag.edge, to, this.duration), false);
-    } else if (moved || drag.drawn) {
-      this.#drag = { ...drag, drawn: true };
-      const to = this.#secondsAt(event.clientX);
+    if (this.dragged === undefined && Math.abs(event.clientX - drag.x) < CLICK_SLACK) return;
+    const to = this.#secondsAt(event.clientX);
+    if (drag.edge === undefined) {
       this.tagged = to < drag.from ? 'start' : 'end';
       this.#setRegion(regionBetween(drag.from, to, this.duration), false);
+    } else {
+      // Counted from the edge, not from where in its grip the finger came down.
+      this.tagged = drag.edge;
+      const moved = drag.before[drag.edge] + to - drag.from;
+      this.#setRegion(withEdge(drag.before, drag.edge, moved, this.duration), false);
     }
   }
 
@@ -134,10 +140,10 @@ export class NwWaveform extends LitElement {
   }
 
   #callOff(): void {
-    const wasDragged = this.dragged !== undefined;
+    const before = this.dragged === undefined ? undefined : this.#drag?.before;
     this.#endDrag();
     this.tagged = undefined;
-    if (wasDragged) this.#setRegion(this.#shown, true);
+    if (before !== undefined) this.#setRegion(before, true);
   }
 
   private handleDoubleClick(): void {

@@ -1,5 +1,5 @@
-/** Longest part of a name, in letters; with a date and an ending it stays under what every system takes. */
-const LONGEST = 60;
+/** Longest part of a name, in letters: of four bytes each at most, it stays under 255 with a date and an ending. */
+const LONGEST = 48;
 
 /** Names that some systems keep for devices. */
 const RESERVED = /^(con|prn|aux|nul|com\d|lpt\d)$/;

@@ -1,72 +1,85 @@
 import { describe, expect, it } from 'vitest';
 import {
-  axisRange,
-  axisTicks,
+  DASHES,
   frequencyText,
   type PlotCurve,
   plotNumber,
+  plotValue,
   valueAt,
 } from '../../../src/sheet/plot-model.ts';
 
-const curve = (values: number[], frequencies = values.map((_, index) => 10 * 2 ** index)): PlotCurve => ({
-  id: 'x',
-  letter: 'A',
-  label: 'x',
-  colour: 'a',
-  dash: [],
-  strength: 'strong',
+const curve = (values: number[], frequencies: number[]): Pick<PlotCurve, 'frequencies' | 'values'> => ({
   frequencies: Float64Array.from(frequencies),
   values: Float64Array.from(values),
 });
 
-describe('plot model', () => {
-  it('rounds the axis to whole steps with air above, never shorter than its least', () => {
-    expect(axisRange('magnitude', [curve([-3, -11.9])])).toEqual({ min: -24, max: 0 });
-    expect(axisRange('magnitude', [curve([-6, -40])])).toEqual({ min: -42, max: 0 });
-    expect(axisRange('phase', [curve([10, -20])])).toEqual({ min: -45, max: 45 });
-    expect(axisRange('difference', [])).toEqual({ min: -3, max: 1 });
+describe('value of a curve', () => {
+  it('lies on a straight line along the logarithmic axis', () => {
+    const line = curve([0, -6, -12], [100, 400, 1600]);
+    expect(valueAt(line, 200)).toBeCloseTo(-3, 12); // an octave of two
+    expect(valueAt(line, 800)).toBeCloseTo(-9, 12);
   });
 
-  it('only grows while it is held', () => {
-    const held = { min: -48, max: 12 };
-    expect(axisRange('magnitude', [curve([-3, -10])], held)).toEqual(held);
-    expect(axisRange('magnitude', [curve([14, -10])], held)).toEqual({ min: -48, max: 18 });
+  it('is the point itself at a point', () => {
+    const line = curve([0.1, -6.7, Number.NEGATIVE_INFINITY], [100, 400, 1600]);
+    expect([valueAt(line, 100), valueAt(line, 400), valueAt(line, 1600)]).toEqual([
+      0.1,
+      -6.7,
+      Number.NEGATIVE_INFINITY,
+    ]);
   });
 
-  it('cuts what falls without end', () => {
-    expect(axisRange('magnitude', [curve([0, -300, Number.NEGATIVE_INFINITY])]).min).toBe(-66);
-  });
-
-  it('numbers every step, or fewer where they would crowd', () => {
-    expect(axisTicks('magnitude', { min: -24, max: 0 })).toEqual([-24, -18, -12, -6, 0]);
-    expect(axisTicks('magnitude', { min: -66, max: 6 }).length).toBeLessThanOrEqual(9);
-  });
-
-  it('interpolates along the logarithmic axis and has nothing outside the curve', () => {
+  it('is not a number outside the curve, or without one', () => {
     const line = curve([0, -6], [100, 400]);
-    expect(valueAt(line, 200)).toBeCloseTo(-3, 12);
-    expect([valueAt(line, 100), valueAt(line, 400)]).toEqual([0, -6]);
-    expect([valueAt(line, 99), valueAt(line, 401), valueAt(curve([]), 100)]).toEqual([
+    expect([valueAt(line, 99), valueAt(line, 401), valueAt(curve([], []), 100)]).toEqual([
       Number.NaN,
       Number.NaN,
       Number.NaN,
+    ]);
+    expect(valueAt(curve([3], [100]), 100)).toBe(3);
+  });
+});
+
+describe('numbers as they are read', () => {
+  it('have a real minus sign and no minus zero', () => {
+    expect([plotNumber(-9.84, 'magnitude'), plotNumber(-0.01, 'magnitude')]).toEqual(['−9.8', '0.0']);
+    expect([plotNumber(4.66, 'magnitude', true), plotNumber(0.01, 'magnitude', true)]).toEqual([
+      '+4.7',
+      '0.0',
     ]);
   });
 
-  it('writes numbers with a real minus sign and no minus zero', () => {
+  it('say what is no number', () => {
     expect([
-      plotNumber(-9.84, 'magnitude'),
-      plotNumber(-0.01, 'magnitude'),
-      plotNumber(4.66, 'magnitude', true),
-    ]).toEqual(['−9.8', '0.0', '+4.7']);
-    expect([plotNumber(Number.NaN, 'phase'), plotNumber(Number.NEGATIVE_INFINITY, 'magnitude')]).toEqual([
-      '–',
-      '−∞',
+      plotNumber(Number.NaN, 'phase'),
+      plotNumber(Number.NEGATIVE_INFINITY, 'magnitude'),
+      plotNumber(Number.POSITIVE_INFINITY, 'impedance'),
+    ]).toEqual(['–', '−∞', '∞']);
+  });
+
+  it('keep a thin space before a unit, but none before a degree sign', () => {
+    expect([plotValue(-9.84, 'magnitude'), plotValue(-44.6, 'phase'), plotValue(8, 'impedance')]).toEqual([
+      '−9.8\u202fdB',
+      '−45°',
+      '8.0\u202fΩ',
     ]);
-    expect([frequencyText(560), frequencyText(1250), frequencyText(31.5)]).toEqual([
-      '560\u202fHz',
-      '1.25\u202fkHz',
+    expect(plotValue(0.456, 'difference', true)).toBe('+0.46\u202fdB');
+  });
+
+  it('name frequencies as people do', () => {
+    expect([31.5, 560, 999.6, 1250, 12_340].map(frequencyText)).toEqual([
       '31.5\u202fHz',
+      '560\u202fHz',
+      '1\u202fkHz',
+      '1.25\u202fkHz',
+      '12.3\u202fkHz',
     ]);
+  });
+});
+
+describe('dashes', () => {
+  it('differ for every voicing', () => {
+    const letters = ['a', 'b', 'c', 'd', 'e', 'f', 'g', 'h'] as const;
+    expect(new Set(letters.map((letter) => DASHES[letter].join())).size).toBe(letters.length);
   });
 });
