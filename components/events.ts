@@ -1,6 +1,8 @@
+import type { ContextRate, PlotView, ThemeChoice } from '../src/bench/preferences.ts';
 import type { SlotName } from '../src/blocks/block.ts';
+import type { VoicingLetter } from '../src/design/design.ts';
 import type { Taper } from '../src/parts/taper.ts';
-import type { Rotation, Seconds } from '../src/units.ts';
+import type { Hertz, Rotation, Seconds } from '../src/units.ts';
 
 /** A knob is being turned (`settled` false) or was let go. */
 export interface KnobMove {
@@ -28,6 +30,28 @@ export interface BenchEvents {
   'nw-clip-open': CustomEvent<{ readonly file: File }>;
   'nw-bypass-set': CustomEvent<{ readonly bypass: boolean }>;
   'nw-choose': CustomEvent<{ readonly id: string }>;
+  'nw-title-set': CustomEvent<{ readonly title: string }>;
+  'nw-undo': CustomEvent<undefined>;
+  'nw-redo': CustomEvent<undefined>;
+  'nw-theme-set': CustomEvent<{ readonly theme: ThemeChoice }>;
+  'nw-view-set': CustomEvent<{ readonly view: PlotView }>;
+  'nw-blocks-set': CustomEvent<{ readonly show: boolean }>;
+  'nw-table-set': CustomEvent<{ readonly show: boolean }>;
+  'nw-pin-set': CustomEvent<{ readonly pinned: boolean }>;
+  'nw-cursor-set': CustomEvent<{ readonly frequency: Hertz }>;
+  'nw-voicing-choose': CustomEvent<{ readonly letter: VoicingLetter }>;
+  'nw-voicing-keep': CustomEvent<undefined>;
+  'nw-voicing-rename': CustomEvent<{ readonly letter: VoicingLetter; readonly name: string }>;
+  'nw-voicing-recolour': CustomEvent<{ readonly letter: VoicingLetter; readonly colour: VoicingLetter }>;
+  'nw-voicing-move': CustomEvent<{ readonly letter: VoicingLetter; readonly places: number }>;
+  'nw-voicing-delete': CustomEvent<{ readonly letter: VoicingLetter }>;
+  'nw-swap-try': CustomEvent<{ readonly value: number }>;
+  'nw-swap-keep': CustomEvent<{ readonly value: number; readonly into: 'present' | 'voicing' }>;
+  'nw-swap-end': CustomEvent<undefined>;
+  'nw-matched-set': CustomEvent<{ readonly matched: boolean }>;
+  'nw-rate-set': CustomEvent<{ readonly rate: ContextRate }>;
+  'nw-hearing-read': CustomEvent<undefined>;
+  'nw-dismiss': CustomEvent<undefined>;
 }
 
 declare global {

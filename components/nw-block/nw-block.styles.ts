@@ -59,17 +59,14 @@ export const blockStyles = css`
     gap: 6px;
     margin-block-start: auto;
   }
-  :host(:not([present])) .knobs,
-  :host(:not([present])) .chips,
-  :host(:not([present])) .doing {
-    opacity: 0.45;
-  }
   :host(:not([present])) .card {
     background: none;
     border-style: dashed;
+    padding: 3px 8px 3px 12px;
   }
-  :host(:not([present])) .knobs {
-    display: none;
+  :host(:not([present])) .name {
+    color: var(--nw-ink-soft);
+    font-weight: 550;
   }
   @media (pointer: coarse) {
     .name {

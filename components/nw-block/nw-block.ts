@@ -99,7 +99,7 @@ export class NwBlock extends LitElement {
             >
               ${title}
             </button>
-            <span class="doing">${this.present ? block.describe(settings) : 'out of the line'}</span>
+            ${this.present ? html`<span class="doing">${block.describe(settings)}</span>` : nothing}
           </div>
           <nw-switch
             .label=${`${title} in the line`}
@@ -107,7 +107,7 @@ export class NwBlock extends LitElement {
             @change=${this.handlePresent}
           ></nw-switch>
         </div>
-        ${knobs.length > 0 ? html`<div class="knobs">${knobs.map((name) => this.#knob(name))}</div>` : nothing}
+        ${this.present && knobs.length > 0 ? html`<div class="knobs">${knobs.map((name) => this.#knob(name))}</div>` : nothing}
         <slot></slot>
         ${
           this.present

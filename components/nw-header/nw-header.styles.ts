@@ -33,7 +33,7 @@ export const headerStyles = css`
     display: flex;
     align-items: baseline;
     gap: 8px;
-    flex: 1 1 200px;
+    flex: 1 1 80px;
     min-width: 0;
     color: var(--nw-ink-soft);
   }
@@ -46,9 +46,9 @@ export const headerStyles = css`
     border-radius: 6px;
     padding: 6px 8px;
     min-height: 32px;
-    min-width: 0;
-    width: 100%;
-    max-width: 22ch;
+    field-sizing: content;
+    min-width: 8ch;
+    max-width: 30ch;
     text-overflow: ellipsis;
   }
   .title:hover {
@@ -71,12 +71,9 @@ export const headerStyles = css`
     .row {
       padding: 4px 12px;
     }
-    .revision {
+    .revision,
+    .word {
       display: none;
-    }
-    .design {
-      order: 3;
-      flex-basis: 100%;
     }
   }
 `;

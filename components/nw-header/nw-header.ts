@@ -1,6 +1,7 @@
 import { html, LitElement, type TemplateResult } from 'lit';
 import { customElement, property } from 'lit/decorators.js';
 import type { ThemeChoice } from '../../src/bench/preferences.ts';
+import { send } from '../events.ts';
 import { baseStyles } from '../theme.ts';
 import { headerStyles } from './nw-header.styles.ts';
 
@@ -44,21 +45,17 @@ export class NwHeader extends LitElement {
   /** Theme chosen. */
   @property() theme: ThemeChoice = 'system';
 
-  #send(type: string, detail?: unknown): void {
-    this.dispatchEvent(new CustomEvent(type, { detail, bubbles: true, composed: true }));
-  }
-
   private handleTitle(event: Event): void {
     const field = event.target as HTMLInputElement;
     const title = field.value.trim();
     if (title === '') field.value = this.designTitle;
-    else if (title !== this.designTitle) this.#send('nw-title-set', { title });
+    else if (title !== this.designTitle) send(this, 'nw-title-set', { title });
   }
 
   override render(): TemplateResult {
     return html`
       <header class="row">
-        <h1 class="mark">
+        <h1 class="mark" aria-label="Notchwork">
           <svg viewBox="0 0 30 20" aria-hidden="true">
             <path
               d="M2 5h5c4 0 4 11 8 11s4-11 8-11h5"
@@ -68,7 +65,7 @@ export class NwHeader extends LitElement {
               stroke-linecap="round"
             />
           </svg>
-          Notchwork
+          <span class="word">Notchwork</span>
         </h1>
         <div class="design">
           <input
@@ -86,7 +83,7 @@ export class NwHeader extends LitElement {
             aria-label=${this.undoName ? `Undo: ${this.undoName}` : 'Undo'}
             title=${this.undoName ? `Undo: ${this.undoName}` : 'Nothing to undo'}
             ?disabled=${this.undoName === ''}
-            @click=${() => this.#send('nw-undo')}
+            @click=${() => send(this, 'nw-undo', undefined)}
           >
             ↶
           </button>
@@ -95,7 +92,7 @@ export class NwHeader extends LitElement {
             aria-label=${this.redoName ? `Redo: ${this.redoName}` : 'Redo'}
             title=${this.redoName ? `Redo: ${this.redoName}` : 'Nothing to redo'}
             ?disabled=${this.redoName === ''}
-            @click=${() => this.#send('nw-redo')}
+            @click=${() => send(this, 'nw-redo', undefined)}
           >
             ↷
           </button>
@@ -103,7 +100,7 @@ export class NwHeader extends LitElement {
             class="button icon"
             aria-label=${THEME_NAMES[this.theme]}
             title=${THEME_NAMES[this.theme]}
-            @click=${() => this.#send('nw-theme-set', { theme: NEXT_THEME[this.theme] })}
+            @click=${() => send(this, 'nw-theme-set', { theme: NEXT_THEME[this.theme] })}
           >
             ${THEME_SIGNS[this.theme]}
           </button>

@@ -16,9 +16,11 @@ export const lineStyles = css`
   }
   li {
     position: relative;
-    flex: 1 1 auto;
-    min-width: 130px;
+    flex: calc(1 + 2 * var(--knobs, 0)) 1 calc(130px + 95px * var(--knobs, 0));
     max-width: 100%;
+  }
+  li.out {
+    flex: 0 0 auto;
   }
   li::after {
     content: '';
@@ -43,7 +45,24 @@ export const lineStyles = css`
   li:last-child::after {
     display: none;
   }
+  li > nw-block {
+    height: 100%;
+  }
+  li.break {
+    flex: 0 0 100%;
+    height: 0;
+    margin-block-start: -12px;
+  }
+  li.break::before,
+  li.break::after,
+  li:has(+ li.break)::before,
+  li:has(+ li.break)::after {
+    display: none;
+  }
   @container (max-width: 620px) {
+    li.break {
+      display: none;
+    }
     .rail {
       display: grid;
       grid-template-columns: minmax(0, 1fr);

@@ -1,4 +1,4 @@
-import { html, LitElement, type TemplateResult } from 'lit';
+import { html, LitElement, nothing, type TemplateResult } from 'lit';
 import { customElement, property } from 'lit/decorators.js';
 import type { SlotName } from '../../src/blocks/block.ts';
 import type { PlacedBlock } from '../../src/blocks/span.ts';
@@ -33,21 +33,33 @@ export class NwLine extends LitElement {
   /** The part being worked on, if any. */
   @property({ attribute: false }) chosen: ChosenPart | undefined;
 
+  /** Blocks out of the line lead on a row of their own, so that the others stay large. */
+  #beginsRow(index: number): boolean {
+    return (
+      index > 0 &&
+      this.entries[index]!.present &&
+      this.entries.slice(0, index).every((entry) => !entry.present)
+    );
+  }
+
+  #entry({ block, settings, present }: LineEntry, index: number): TemplateResult {
+    return html`${this.#beginsRow(index) ? html`<li class="break" role="presentation"></li>` : nothing}
+      <li class=${present ? 'in' : 'out'} style="--knobs: ${present ? Object.keys(block.knobs).length : 0}">
+        <nw-block
+          .block=${block}
+          .settings=${settings}
+          .present=${present}
+          .chosenPart=${this.chosen?.slot === block.slot ? this.chosen.part : ''}
+        >
+          <slot name=${block.slot}></slot>
+        </nw-block>
+      </li>`;
+  }
+
   override render(): TemplateResult {
     return html`
       <ol class="rail" aria-label="The line, in the order of the signal">
-        ${this.entries.map(
-          ({ block, settings, present }) => html`<li>
-            <nw-block
-              .block=${block}
-              .settings=${settings}
-              .present=${present}
-              .chosenPart=${this.chosen?.slot === block.slot ? this.chosen.part : ''}
-            >
-              <slot name=${block.slot}></slot>
-            </nw-block>
-          </li>`,
-        )}
+        ${this.entries.map((entry, index) => this.#entry(entry, index))}
       </ol>
     `;
   }

@@ -25,6 +25,9 @@ export class NwMenu extends LitElement {
   /** Words on the button. */
   @property() label = '';
 
+  /** What the button is for, where its words alone do not tell. */
+  @property() spoken = '';
+
   /** What can be chosen. */
   @property({ attribute: false }) items: readonly MenuItem[] = [];
 
@@ -85,6 +88,7 @@ export class NwMenu extends LitElement {
     return html`
       <button
         class="button ${this.primary ? 'primary' : ''}"
+        aria-label=${this.spoken || nothing}
         aria-haspopup="menu"
         aria-expanded=${this.open}
         @click=${() => {

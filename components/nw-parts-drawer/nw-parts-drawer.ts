@@ -111,7 +111,8 @@ export class NwPartsDrawer extends LitElement {
   }
 
   #taper(knob: string, label: string, taper: Taper): TemplateResult {
-    const set = (next: Taper): void => send(this, 'nw-taper-set', { slot: this.block!.slot, knob, taper: next });
+    const set = (next: Taper): void =>
+      send(this, 'nw-taper-set', { slot: this.block!.slot, knob, taper: next });
     return html`<span class="taper">
       <select
         aria-label="Taper of ${label}"
@@ -136,7 +137,8 @@ export class NwPartsDrawer extends LitElement {
               .value=${String(Math.round(taper.midpoint * 1000) / 10)}
               @change=${(event: Event) => {
                 const field = event.target as HTMLInputElement;
-                if (field.checkValidity() && field.value !== '') set({ ...taper, midpoint: field.valueAsNumber / 100 });
+                if (field.checkValidity() && field.value !== '')
+                  set({ ...taper, midpoint: field.valueAsNumber / 100 });
                 else field.value = String(taper.midpoint * 100);
               }}
             />
@@ -169,7 +171,10 @@ export class NwPartsDrawer extends LitElement {
                     })}
                 >
                   ${this.variants.map(
-                    ({ variant, title }) => html`<option value=${variant} ?selected=${variant === block.variant}>
+                    ({
+                      variant,
+                      title,
+                    }) => html`<option value=${variant} ?selected=${variant === block.variant}>
                       ${title}
                     </option>`,
                   )}

@@ -59,9 +59,6 @@ export const playBarStyles = css`
     justify-items: start;
     min-width: 0;
   }
-  nw-menu {
-    white-space: nowrap;
-  }
   .time {
     padding-inline-start: 1px;
     white-space: nowrap;

@@ -26,11 +26,17 @@ const NARROW = 700;
 const LONGEST_TITLE = 26;
 const LONGEST_NARROW_TITLE = 14;
 
-function shortened(title: string, most: number): string {
+/** A title that stays on one line of the button: cut to so many letters, its spaces not to be broken at. */
+function buttonTitle(title: string, most: number): string {
   const letters = [...title];
-  if (letters.length <= most) return title;
-  const kept = letters.slice(0, most - 1).join('');
-  return `${kept.trimEnd()}…`;
+  const kept =
+    letters.length <= most
+      ? title
+      : `${letters
+          .slice(0, most - 1)
+          .join('')
+          .trimEnd()}…`;
+  return kept.replaceAll(' ', '\u00a0');
 }
 
 /** The picture on the play button: a triangle, or a square while it plays. */
@@ -219,11 +225,12 @@ export class NwPlayBar extends LitElement {
         >
           <svg viewBox="0 0 24 24" aria-hidden="true"><path d=${this.playing ? STOP_SIGN : PLAY_SIGN}></path></svg>
         </button>
-        <div class="clip" role="group" aria-label="Clip">
+        <div class="clip">
           <nw-menu
             upwards
             title=${this.clipTitle}
-            label=${shortened(this.clipTitle, this.isNarrow ? LONGEST_NARROW_TITLE : LONGEST_TITLE) || 'Choose a clip'}
+            spoken=${this.clipTitle === '' ? '' : `Clip: ${this.clipTitle}`}
+            label=${buttonTitle(this.clipTitle, this.isNarrow ? LONGEST_NARROW_TITLE : LONGEST_TITLE) || 'Choose a clip'}
             .items=${items}
             @nw-choose=${this.handleChoice}
           ></nw-menu>

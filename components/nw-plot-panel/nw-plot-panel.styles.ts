@@ -78,16 +78,31 @@ export const plotPanelStyles = css`
     outline-offset: 1px;
   }
   @media (max-width: 760px) {
+    /* The plot alone stays at the top while the line scrolls under it, so nothing around it may hold it. */
+    :host,
+    .card,
     .body {
-      grid-template-columns: minmax(0, 1fr);
+      display: contents;
+    }
+    .bar,
+    .figures,
+    .plot {
+      background: var(--nw-sheet);
+      border: 1px solid var(--nw-rule);
+      border-radius: var(--nw-radius);
+    }
+    .bar {
+      padding: 4px 8px;
     }
     .plot {
-      height: 220px;
+      height: 210px;
+      position: sticky;
+      inset-block-start: 0;
+      z-index: 5;
     }
     .figures {
-      border-inline-start: 0;
-      border-block-start: 1px solid var(--nw-hairline);
       padding: 8px 14px;
+      overflow: visible;
     }
     .views {
       margin-inline-start: 0;

@@ -1,13 +1,14 @@
 import { html, LitElement, type TemplateResult } from 'lit';
-import { customElement, property, query } from 'lit/decorators.js';
+import { customElement, property } from 'lit/decorators.js';
 import type { PlotView } from '../../src/bench/preferences.ts';
 import type { Hertz } from '../../src/units.ts';
 import '../nw-curve-table/nw-curve-table.ts';
 import '../nw-figures/nw-figures.ts';
 import type { Figure } from '../nw-figures/nw-figures.ts';
 import '../nw-plot/nw-plot.ts';
-import type { NwPlot } from '../nw-plot/nw-plot.ts';
 import type { PlotCurve } from '../../src/sheet/plot-model.ts';
+import { send } from '../events.ts';
+import type { NwPlot } from '../nw-plot/nw-plot.ts';
 import { baseStyles } from '../theme.ts';
 import { plotPanelStyles } from './nw-plot-panel.styles.ts';
 
@@ -41,8 +42,6 @@ export interface PlotWords {
 export class NwPlotPanel extends LitElement {
   static override styles = [baseStyles, plotPanelStyles];
 
-  @query('nw-plot') private plot!: NwPlot | null;
-
   /** Curves of the chosen view. */
   @property({ attribute: false }) curves: readonly PlotCurve[] = [];
 
@@ -70,17 +69,8 @@ export class NwPlotPanel extends LitElement {
   /** Where the reading cursor stands, in hertz. */
   @property({ type: Number }) cursor: Hertz = 1000;
 
-  #send(type: string, detail: unknown): void {
-    this.dispatchEvent(new CustomEvent(type, { detail, bubbles: true, composed: true }));
-  }
-
   private handleCursor(event: Event): void {
-    this.#send('nw-cursor-set', { frequency: (event.target as NwPlot).cursor });
-  }
-
-  /** The plot as a PNG picture on a light ground; `undefined` while the table is shown. */
-  async toPng(title: string): Promise<Blob | undefined> {
-    return this.plot?.toPng(title);
+    send(this, 'nw-cursor-set', { frequency: (event.target as NwPlot).cursor });
   }
 
   override render(): TemplateResult {
@@ -93,7 +83,7 @@ export class NwPlotPanel extends LitElement {
               class="toggle"
               aria-pressed=${this.pinned}
               title="Keep the present curve as a dotted reference"
-              @click=${() => this.#send('nw-pin-set', { pinned: !this.pinned })}
+              @click=${() => send(this, 'nw-pin-set', { pinned: !this.pinned })}
             >
               ${this.pinned ? 'Unpin' : 'Pin'}
             </button>
@@ -101,14 +91,14 @@ export class NwPlotPanel extends LitElement {
               class="toggle"
               aria-pressed=${this.blocks}
               ?disabled=${this.view !== 'magnitude'}
-              @click=${() => this.#send('nw-blocks-set', { show: !this.blocks })}
+              @click=${() => send(this, 'nw-blocks-set', { show: !this.blocks })}
             >
               Blocks
             </button>
             <button
               class="toggle"
               aria-pressed=${this.table}
-              @click=${() => this.#send('nw-table-set', { show: !this.table })}
+              @click=${() => send(this, 'nw-table-set', { show: !this.table })}
             >
               Table
             </button>
@@ -119,7 +109,7 @@ export class NwPlotPanel extends LitElement {
                     class="toggle"
                     role="radio"
                     aria-checked=${this.view === view}
-                    @click=${() => this.#send('nw-view-set', { view })}
+                    @click=${() => send(this, 'nw-view-set', { view })}
                   >
                     ${label}
                   </button>

@@ -58,9 +58,11 @@ export class NwValueField extends LitElement {
 
   #step(steps: number): void {
     const [min, max] = this.range;
-    const from = this.value > 0 ? next(this.value, this.series, steps) : steps > 0 ? Math.max(min, 1e-12) : min;
+    const from =
+      this.value > 0 ? next(this.value, this.series, steps) : steps > 0 ? Math.max(min, 1e-12) : min;
     if (from >= min && from <= max) this.#accept(from);
-    else this.problem = `That is the end: ${formatValue(min, this.unit)} to ${formatValue(max, this.unit)} is accepted.`;
+    else
+      this.problem = `That is the end: ${formatValue(min, this.unit)} to ${formatValue(max, this.unit)} is accepted.`;
   }
 
   private handleInput(event: Event): void {

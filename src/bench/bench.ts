@@ -1,10 +1,12 @@
 import { computed, type ReadonlySignal, type Signal, signal } from '@preact/signals-core';
-import { defaultDesign, type VoicingLetter } from '../design/design.ts';
+import { activeVoicing, defaultDesign, type VoicingLetter } from '../design/design.ts';
 import { createDesignStore, type DesignStore } from '../design/store.ts';
 import { DEFAULT_GRID } from '../response/grid.ts';
 import type { Hertz } from '../units.ts';
-import { type LineAnalysis, LineAnalyser } from './line-analysis.ts';
+import { LineAnalyser, type LineAnalysis } from './line-analysis.ts';
+import type { DrawnVoicing } from './plot-curves.ts';
 import { browserStorage, createPreferences } from './preferences.ts';
+import { BenchSound } from './sound.ts';
 
 /** A curve that was pinned to compare with; it stays as it is while the design changes. */
 export interface PinnedCurve {
@@ -12,30 +14,27 @@ export interface PinnedCurve {
   readonly analysis: LineAnalysis;
 }
 
-/** A voicing with what is known of its line. */
-export interface VoicingAnalysis {
-  readonly letter: VoicingLetter;
-  readonly name: string;
-  readonly analysis: LineAnalysis;
-}
-
-/** The running bench without its sound: the design, what is derived from it, and what the page shows. */
+/** The running bench: the design, what is derived from it, and what the page shows. */
 export interface Bench {
   readonly store: DesignStore;
   readonly preferences: ReturnType<typeof createPreferences>;
   /** All voicings, in the design's order. */
-  readonly voicings: ReadonlySignal<readonly VoicingAnalysis[]>;
+  readonly voicings: ReadonlySignal<readonly DrawnVoicing[]>;
   /** The voicing that is edited and heard. */
-  readonly active: ReadonlySignal<VoicingAnalysis>;
+  readonly active: ReadonlySignal<DrawnVoicing>;
+  /** Its line as it was before the move that is going on, if one is. */
+  readonly settled: ReadonlySignal<LineAnalysis>;
   readonly pinned: Signal<PinnedCurve | undefined>;
   /** Where the reading cursor stands. */
   readonly cursor: Signal<Hertz>;
   /** Whether a control is being moved right now (the axis then holds still). */
   readonly moving: ReadonlySignal<boolean>;
+  readonly sound: BenchSound;
 }
 
 /** Makes a bench with a new design on it. */
 export function createBench(store: DesignStore = createDesignStore(defaultDesign())): Bench {
+  const settledAnalyser = new LineAnalyser(DEFAULT_GRID);
   const analysers = new Map<VoicingLetter, LineAnalyser>();
   const analyserOf = (letter: VoicingLetter): LineAnalyser => {
     let analyser = analysers.get(letter);
@@ -47,16 +46,33 @@ export function createBench(store: DesignStore = createDesignStore(defaultDesign
   };
   const voicings = computed(() =>
     store.design.value.voicings.map(
-      ({ letter, name, line }): VoicingAnalysis => ({ letter, name, analysis: analyserOf(letter).of(line) }),
+      ({ letter, name, colour, line }): DrawnVoicing => ({
+        letter,
+        name,
+        colour,
+        analysis: analyserOf(letter).of(line),
+      }),
     ),
   );
+  const preferences = createPreferences(browserStorage());
+  const active = computed(() => {
+    const letter = store.voicing.value.letter;
+    return voicings.value.find((entry) => entry.letter === letter) ?? voicings.value[0]!;
+  });
+  const sound = new BenchSound({
+    line: computed(() => active.value.analysis),
+    contextRate: computed(() => preferences.value.value.contextRate),
+    matched: computed(() => preferences.value.value.matched),
+  });
   return {
     store,
-    preferences: createPreferences(browserStorage()),
+    preferences,
+    sound,
     voicings,
-    active: computed(() => {
-      const letter = store.voicing.value.letter;
-      return voicings.value.find((entry) => entry.letter === letter) ?? voicings.value[0]!;
+    active,
+    settled: computed(() => {
+      const { moving, present } = store.history.value;
+      return settledAnalyser.of(activeVoicing(moving ?? present).line);
     }),
     pinned: signal(undefined),
     cursor: signal(1000),

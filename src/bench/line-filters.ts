@@ -1,17 +1,10 @@
+import type { LineFilter } from '../audio/engine-types.ts';
 import type { SpanTransfer } from '../blocks/span.ts';
 import { bilinear } from '../filter/bilinear.ts';
 import { factor } from '../filter/factor.ts';
-import type { DigitalSection } from '../filter/section.ts';
 import type { Hertz } from '../units.ts';
 
-/** The digital filter of one span, ready for the chain. */
-export interface SpanFilter {
-  /** The same for the same place in the line, so that the chain knows what it replaces. */
-  readonly key: string;
-  readonly sections: readonly DigitalSection[];
-}
-
-const made = new WeakMap<SpanTransfer, Map<Hertz, SpanFilter>>();
+const made = new WeakMap<SpanTransfer, Map<Hertz, LineFilter>>();
 
 /**
  * The line's filters at a sample rate, one for each span, remembered for as long as the span's
@@ -19,7 +12,7 @@ const made = new WeakMap<SpanTransfer, Map<Hertz, SpanFilter>>();
  *
  * @throws NotchworkError `filter-unstable` where a span has a pole in the right half-plane.
  */
-export function lineFilters(spans: readonly SpanTransfer[], sampleRate: Hertz): readonly SpanFilter[] {
+export function lineFilters(spans: readonly SpanTransfer[], sampleRate: Hertz): readonly LineFilter[] {
   return spans.map((span) => {
     let byRate = made.get(span);
     if (byRate === undefined) {

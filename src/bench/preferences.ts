@@ -19,6 +19,8 @@ export type ContextRate = (typeof CONTEXT_RATES)[number];
 export interface Preferences {
   readonly theme: ThemeChoice;
   readonly contextRate: ContextRate;
+  /** Whether everything is heard at the same loudness. */
+  readonly matched: boolean;
   /** What the plot shows. */
   readonly plotView: PlotView;
   /** Whether each block's share is drawn under the line's curve. */
@@ -32,6 +34,7 @@ export interface Preferences {
 const FIRST: Preferences = {
   theme: 'system',
   contextRate: 48_000,
+  matched: true,
   plotView: 'magnitude',
   showBlocks: false,
   showTable: false,
@@ -42,6 +45,7 @@ const FIRST: Preferences = {
 const PREFERENCE_HOME: { readonly [Key in keyof Preferences]: 'browser' | 'nowhere' } = {
   theme: 'browser',
   contextRate: 'browser',
+  matched: 'nowhere',
   plotView: 'nowhere',
   showBlocks: 'nowhere',
   showTable: 'browser',

@@ -52,7 +52,10 @@ export function readArguments(
       options: Object.fromEntries(
         options.map((option) => [
           option.name,
-          { type: option.value === undefined ? ('boolean' as const) : ('string' as const), multiple: option.multiple ?? false },
+          {
+            type: option.value === undefined ? ('boolean' as const) : ('string' as const),
+            multiple: option.multiple ?? false,
+          },
         ]),
       ),
     });
@@ -88,7 +91,10 @@ export function readKnobs(pairs: readonly string[]): ReadonlyMap<string, number>
     pairs.map((pair) => {
       const cut = pair.indexOf('=');
       if (cut <= 0) throw usageError(`--knob is “${pair}”; it takes NAME=POSITION, as in treble=0.5.`);
-      return [pair.slice(0, cut), readNumber(`knob ${pair.slice(0, cut)}`, pair.slice(cut + 1), 0, 1)] as const;
+      return [
+        pair.slice(0, cut),
+        readNumber(`knob ${pair.slice(0, cut)}`, pair.slice(cut + 1), 0, 1),
+      ] as const;
     }),
   );
 }

@@ -46,7 +46,9 @@ async function run(args: readonly string[]): Promise<void> {
   }
   const command = COMMANDS.find((entry) => entry.name === name);
   if (command === undefined) {
-    throw usageError(`There is no command “${name}”; there are ${COMMANDS.map((entry) => entry.name).join(', ')}.`);
+    throw usageError(
+      `There is no command “${name}”; there are ${COMMANDS.map((entry) => entry.name).join(', ')}.`,
+    );
   }
   if (rest.includes('--help') || rest.includes('-h')) {
     process.stdout.write(helpOf(command));
@@ -69,7 +71,9 @@ export async function main(args: readonly string[]): Promise<number> {
     process.stderr.write(`${messageOf(error)}\n`);
     if (isUsage) process.stderr.write('Add --help for what can be called.\n');
     if (!(error instanceof NotchworkError)) {
-      process.stderr.write('This is a fault of the program, not of the input; please report it with the file.\n');
+      process.stderr.write(
+        'This is a fault of the program, not of the input; please report it with the file.\n',
+      );
     }
     return isUsage ? 2 : 1;
   }

@@ -40,6 +40,11 @@ export function settle(history: History, design: Design, name: string): History 
   return { past, present: design, future: [], moving: undefined };
 }
 
+/** Puts back the design as it was before the move that is going on. */
+export function cancel(history: History): History {
+  return history.moving === undefined ? history : { ...history, present: history.moving, moving: undefined };
+}
+
 /** Goes one step back; the same history where there is none. */
 export function undo(history: History): History {
   const step = history.past.at(-1);

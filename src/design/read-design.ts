@@ -8,7 +8,10 @@ import { DESIGN_VERSION, type Design, defaultLine, type Voicing } from './design
 import { designSchema } from './design-schema.ts';
 
 function invalid(where: string, what: string): NotchworkError {
-  return new NotchworkError('design-invalid', `This design cannot be read: ${where} ${what}. Nothing was changed.`);
+  return new NotchworkError(
+    'design-invalid',
+    `This design cannot be read: ${where} ${what}. Nothing was changed.`,
+  );
 }
 
 function parseJson(text: string): unknown {
@@ -104,7 +107,12 @@ export function readDesign(text: string): Design {
     const line = Object.fromEntries(
       SLOTS.map((slot) => {
         const given = voicing.line[slot] as SlotSettings | undefined;
-        return [slot, given ? completeSlot(`voicings.${index}.line.${slot}`, slot, given) : { ...fallback[slot], present: false }];
+        return [
+          slot,
+          given
+            ? completeSlot(`voicings.${index}.line.${slot}`, slot, given)
+            : { ...fallback[slot], present: false },
+        ];
       }),
     ) as LineSettings;
     return { ...voicing, colour: voicing.colour ?? voicing.letter, line: { ...voicing.line, ...line } };

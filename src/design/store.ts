@@ -1,7 +1,7 @@
 import { computed, type ReadonlySignal, signal } from '@preact/signals-core';
 import type { DesignChange } from './changes.ts';
 import { activeVoicing, type Design, type Voicing } from './design.ts';
-import { type History, move, redo, settle, startHistory, undo } from './history.ts';
+import { cancel, type History, move, redo, settle, startHistory, undo } from './history.ts';
 
 /** The one store of a bench: readers get signals, writers call these actions. */
 export interface DesignStore {
@@ -13,6 +13,8 @@ export interface DesignStore {
   preview(change: DesignChange): void;
   /** Makes a change; `name` is what undo will call it. */
   apply(change: DesignChange, name: string): void;
+  /** Puts back what was only shown. */
+  cancel(): void;
   undo(): void;
   redo(): void;
   /** Replaces the whole design (a file was opened); nothing before it can be undone. */
@@ -35,6 +37,9 @@ export function createDesignStore(first: Design): DesignStore {
     },
     apply(change, name) {
       history.value = settle(history.peek(), change(design.peek()), name);
+    },
+    cancel() {
+      history.value = cancel(history.peek());
     },
     undo() {
       history.value = undo(history.peek());

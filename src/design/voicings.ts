@@ -36,7 +36,12 @@ export function keepVoicing(name: string, line?: LineSettings): DesignChange {
   return (design) => {
     const letter = freeLetter(design);
     if (letter === undefined) return design;
-    const kept: Voicing = { letter, name: tidyName(name, letter), colour: letter, line: line ?? activeVoicing(design).line };
+    const kept: Voicing = {
+      letter,
+      name: tidyName(name, letter),
+      colour: letter,
+      line: line ?? activeVoicing(design).line,
+    };
     return { ...design, voicings: [...design.voicings, kept], active: letter };
   };
 }

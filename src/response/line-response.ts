@@ -44,7 +44,8 @@ export function lineResponse(spans: readonly SpanTransfer[], grid: FrequencyGrid
   );
   for (const { transfer } of spans) {
     const share = magnitudeOf(transfer, grid);
-    for (let point = 0; point < magnitude.length; point += 1) magnitude[point] = magnitude[point]! + share[point]!;
+    for (let point = 0; point < magnitude.length; point += 1)
+      magnitude[point] = magnitude[point]! + share[point]!;
   }
   return { blocks, magnitude };
 }

@@ -99,7 +99,9 @@ export function trialVerdict(trial: BlindTrial): string {
   const odds = chance < 0.001 ? 'less than 0.1 %' : `${(100 * chance).toFixed(chance < 0.1 ? 1 : 0)} %`;
   const opening = `${hits} of ${count} right. Guessing alone does as well or better in ${odds} of such runs.`;
   if (count < 8) return `${opening} With so few trials not much can be said; ten or more say more.`;
-  if (chance <= 0.01) return `${opening} It is hard to explain this by luck: you very probably heard a difference.`;
-  if (chance <= 0.05) return `${opening} That suggests a difference you can hear; another run would make it firmer.`;
+  if (chance <= 0.01)
+    return `${opening} It is hard to explain this by luck: you very probably heard a difference.`;
+  if (chance <= 0.05)
+    return `${opening} That suggests a difference you can hear; another run would make it firmer.`;
   return `${opening} This does not show that you heard a difference, nor that there is none.`;
 }

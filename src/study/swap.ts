@@ -2,7 +2,7 @@ import type { SlotName } from '../blocks/block.ts';
 import type { LineSettings } from '../blocks/line.ts';
 import { LineTransfer } from '../blocks/line-transfer.ts';
 import { withPart } from '../blocks/settings.ts';
-import { type PlacedBlock, type SpanTransfer } from '../blocks/span.ts';
+import type { PlacedBlock, SpanTransfer } from '../blocks/span.ts';
 import { lineLevel } from '../response/line-response.ts';
 import type { Decibels, Hertz } from '../units.ts';
 
@@ -74,6 +74,9 @@ export function lineWithPart(line: LineSettings, slot: SlotName, part: string, v
   if (own === undefined) return line;
   return {
     ...line,
-    [slot]: { ...settings, variants: { ...settings.variants, [settings.variant]: withPart(own, part, value) } },
+    [slot]: {
+      ...settings,
+      variants: { ...settings.variants, [settings.variant]: withPart(own, part, value) },
+    },
   };
 }

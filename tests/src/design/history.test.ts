@@ -1,7 +1,15 @@
 import { describe, expect, it } from 'vitest';
 import { setWords } from '../../../src/design/changes.ts';
 import { defaultDesign } from '../../../src/design/design.ts';
-import { HISTORY_STEPS, move, redo, settle, startHistory, undo } from '../../../src/design/history.ts';
+import {
+  cancel,
+  HISTORY_STEPS,
+  move,
+  redo,
+  settle,
+  startHistory,
+  undo,
+} from '../../../src/design/history.ts';
 
 const first = defaultDesign();
 const titled = (title: string) => setWords({ title })(first);
@@ -59,6 +67,12 @@ describe('history', () => {
     }
     expect(history.past.length).toBeLessThanOrEqual(HISTORY_STEPS + 1);
     expect(history.past.length).toBeGreaterThanOrEqual(500);
+  });
+
+  it('puts back what was only shown, without a step', () => {
+    const history = cancel(move(startHistory(first), titled('a')));
+    expect([history.present, history.past, history.moving]).toEqual([first, [], undefined]);
+    expect(cancel(history)).toBe(history);
   });
 
   it('undoes a move in flight together with the step before it', () => {

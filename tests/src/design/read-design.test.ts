@@ -53,16 +53,76 @@ describe('reading a design', () => {
   });
 
   it.each<[string, (file: Record<string, any>) => void, RegExp]>([
-    ['a foreign format', (file) => { file['format'] = 'other'; }, /format/],
-    ['a version that is no number', (file) => { file['version'] = 'one'; }, /version/],
-    ['a part out of range', (file) => { file['voicings'][0].line.tone.variants['three-knob'].parts.slope = -1; }, /slope.*-1/],
-    ['a part that is no number', (file) => { file['voicings'][0].line.tone.variants['three-knob'].parts.slope = null; }, /slope/],
-    ['a knob beyond its stop', (file) => { file['voicings'][0].line.tone.variants['three-knob'].knobs.bass = 1.5; }, /bass/],
-    ['an unknown option', (file) => { file['voicings'][0].line.tone.variants['three-knob'].choices.load = 'moon'; }, /load.*moon/],
-    ['an unknown variant', (file) => { file['voicings'][0].line.tone.variant = 'nine-knob'; }, /nine-knob/],
-    ['no voicing', (file) => { file['voicings'] = []; }, /voicings/],
-    ['a letter used twice', (file) => { file['voicings'].push(file['voicings'][0]); }, /letter/],
-    ['an active letter that is not there', (file) => { file['active'] = 'C'; }, /active/],
+    [
+      'a foreign format',
+      (file) => {
+        file['format'] = 'other';
+      },
+      /format/,
+    ],
+    [
+      'a version that is no number',
+      (file) => {
+        file['version'] = 'one';
+      },
+      /version/,
+    ],
+    [
+      'a part out of range',
+      (file) => {
+        file['voicings'][0].line.tone.variants['three-knob'].parts.slope = -1;
+      },
+      /slope.*-1/,
+    ],
+    [
+      'a part that is no number',
+      (file) => {
+        file['voicings'][0].line.tone.variants['three-knob'].parts.slope = null;
+      },
+      /slope/,
+    ],
+    [
+      'a knob beyond its stop',
+      (file) => {
+        file['voicings'][0].line.tone.variants['three-knob'].knobs.bass = 1.5;
+      },
+      /bass/,
+    ],
+    [
+      'an unknown option',
+      (file) => {
+        file['voicings'][0].line.tone.variants['three-knob'].choices.load = 'moon';
+      },
+      /load.*moon/,
+    ],
+    [
+      'an unknown variant',
+      (file) => {
+        file['voicings'][0].line.tone.variant = 'nine-knob';
+      },
+      /nine-knob/,
+    ],
+    [
+      'no voicing',
+      (file) => {
+        file['voicings'] = [];
+      },
+      /voicings/,
+    ],
+    [
+      'a letter used twice',
+      (file) => {
+        file['voicings'].push(file['voicings'][0]);
+      },
+      /letter/,
+    ],
+    [
+      'an active letter that is not there',
+      (file) => {
+        file['active'] = 'C';
+      },
+      /active/,
+    ],
   ])('refuses %s and says where', (_, change, message) => {
     const error = errorOf(changed(change));
     expect(error.code).toBe('design-invalid');
@@ -76,7 +136,11 @@ describe('reading a design', () => {
   });
 
   it('refuses a newer version without touching anything', () => {
-    const error = errorOf(changed((file) => { file['version'] = 99; }));
+    const error = errorOf(
+      changed((file) => {
+        file['version'] = 99;
+      }),
+    );
     expect(error.code).toBe('design-too-new');
     expect(error.message).toMatch(/99/);
   });

@@ -13,14 +13,15 @@ import {
 
 describe('blind trial', () => {
   it('has an order that the seed fixes', () => {
-    const order = (seed: number) => Array.from({ length: 50 }, (_, index) => hiddenSide({ seed }, index)).join();
+    const order = (seed: number) =>
+      Array.from({ length: 50 }, (_, index) => hiddenSide({ seed }, index)).join();
     expect(order(7)).toBe(order(7));
     expect(order(7)).not.toBe(order(8));
   });
 
   it('draws both sides evenly and without pattern', () => {
     const count = 4000;
-    const sides = Array.from({ length: count }, (_, index) => hiddenSide({ seed: 3 }, index % 40 + 40 * 0));
+    const sides = Array.from({ length: count }, (_, index) => hiddenSide({ seed: 3 }, (index % 40) + 40 * 0));
     expect(new Set(sides).size).toBe(2);
     const random = seededRandom(12345);
     const draws = Array.from({ length: count }, () => (random() < 0.5 ? 1 : 0) as number);

@@ -12,7 +12,13 @@ const places = { low: 100, dip: 560, middle: 1000, high: 5000 };
 
 describe('swap', () => {
   it('says what a value would change, against the line computed afresh', () => {
-    const [smaller, present, larger] = swapPart(placed, 'tone', 'trebleCap', [220e-12, 390e-12, 680e-12], places);
+    const [smaller, present, larger] = swapPart(
+      placed,
+      'tone',
+      'trebleCap',
+      [220e-12, 390e-12, 680e-12],
+      places,
+    );
     expect(present).toMatchObject({ present: true, change: { low: 0, dip: 0, middle: 0, high: 0 } });
     const level = (value: number, frequency: number) =>
       lineLevel(
@@ -25,7 +31,10 @@ describe('swap', () => {
         ),
         frequency,
       );
-    for (const [candidate, value] of [[smaller, 220e-12], [larger, 680e-12]] as const) {
+    for (const [candidate, value] of [
+      [smaller, 220e-12],
+      [larger, 680e-12],
+    ] as const) {
       // Both sides evaluate the same formula; only the order of additions differs.
       expect(candidate!.change.middle).toBeCloseTo(level(value, 1000) - level(390e-12, 1000), 9);
       expect(candidate!.change.high).toBeCloseTo(level(value, 5000) - level(390e-12, 5000), 9);
