@@ -13,9 +13,11 @@ function share(level: Decibels): number {
   return level > QUIETEST ? Math.min((level - QUIETEST) / (LOUDEST - QUIETEST), 1) : 0;
 }
 
-/** A level in words a screen reader says well. */
+/** A level in words that are said well. */
 function spoken(level: Decibels): string {
-  return level > QUIETEST ? `${level < 0 ? 'minus ' : ''}${Math.abs(Math.round(level))} decibels` : 'silent';
+  if (!(level > QUIETEST)) return 'silent';
+  const rounded = Math.round(level);
+  return `${rounded < 0 ? 'minus ' : ''}${Math.abs(rounded)} decibels`;
 }
 
 /**

@@ -3,7 +3,7 @@ import { DASHES, type PlotCurve } from '../../../src/sheet/plot-model.ts';
 const LETTERS = ['a', 'b', 'c', 'd', 'e', 'f'] as const;
 
 /** Six curves of 512 points with a dip, moved by `shift` dB; the first is the strong one. */
-export function sampleCurves(shift = 0, count = LETTERS.length): readonly PlotCurve[] {
+export function sampleCurves(shift = 0, count: number = LETTERS.length): readonly PlotCurve[] {
   const frequencies = Float64Array.from({ length: 512 }, (_, index) => 10 * 4000 ** (index / 511));
   return LETTERS.slice(0, count).map((letter, rank) => ({
     id: letter,
