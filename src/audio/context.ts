@@ -7,7 +7,7 @@ import type { Hertz } from '../units.ts';
 import type { SoundState } from './engine-types.ts';
 import { Scope } from './scope.ts';
 
-const START_PATIENCE = 2000; // ms that a context may take to start
+const START_PATIENCE = 5_000; // ms; Firefox takes two seconds to open a device for the first time
 const STALL_LOOK = 1000; // ms between two looks at whether time passes
 
 /** Extra collaborators for tests. */

@@ -4,5 +4,7 @@ declare module 'fft.js' {
     constructor(size: number);
     createComplexArray(): number[];
     realTransform(output: number[], input: ArrayLike<number>): void;
+    completeSpectrum(spectrum: number[]): void;
+    inverseTransform(output: number[], input: ArrayLike<number>): void;
   }
 }

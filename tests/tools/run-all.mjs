@@ -47,8 +47,14 @@ function readJson(file) {
 async function vitest(project) {
   const file = join(scratch, `${project}.json`);
   const code = await run(bin('vitest'), [
-    'run', '--config', '.config/vitest.config.ts', '--project', project,
-    '--reporter=default', '--reporter=json', `--outputFile.json=${file}`,
+    'run',
+    '--config',
+    '.config/vitest.config.ts',
+    '--project',
+    project,
+    '--reporter=default',
+    '--reporter=json',
+    `--outputFile.json=${file}`,
   ]);
   const report = readJson(file);
   const passed = report?.numPassedTests ?? 0;
@@ -73,13 +79,19 @@ async function step(title, action) {
   console.log(`\n── ${title}`);
   const result = await action();
   results.push(result);
-  console.log(`── ${title}: ${result.failed === 0 ? 'passed' : 'FAILED'} in ${((Date.now() - start) / 1000).toFixed(0)} s`);
+  console.log(
+    `── ${title}: ${result.failed === 0 ? 'passed' : 'FAILED'} in ${((Date.now() - start) / 1000).toFixed(0)} s`,
+  );
 }
 
 await ensureChromium();
-await step('format and lint', () => tool('lint', 'biome', ['check', '--config-path=.config', '--error-on-warnings', '.']));
+await step('format and lint', () =>
+  tool('lint', 'biome', ['check', '--config-path=.config', '--error-on-warnings', '.']),
+);
 await step('types', () => tool('types', 'tsc', ['--noEmit']));
-await step('types of the pure rooms, without the DOM', () => tool('pure types', 'tsc', ['--noEmit', '--project', '.config/tsconfig.pure.json']));
+await step('types of the pure rooms, without the DOM', () =>
+  tool('pure types', 'tsc', ['--noEmit', '--project', '.config/tsconfig.pure.json']),
+);
 await step('import rules', async () => {
   const code = await run(process.execPath, ['tests/tools/check-imports.mjs']);
   return { name: 'imports', passed: code === 0 ? 1 : 0, failed: code === 0 ? 0 : 1 };
