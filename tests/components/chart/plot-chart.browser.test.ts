@@ -16,22 +16,18 @@ function pictureOf(
   return { curves, quantity, range: axisRange(quantity, curves), cursor: 1000, colours };
 }
 
-/** Pixels of a colour, within 24 of 255 in each channel, in a rectangle of a canvas in CSS pixels. */
-function count(
-  canvas: HTMLCanvasElement,
-  hex: string,
-  [left, top, right, bottom]: readonly number[],
-): number {
-  const scale = devicePixelRatio;
-  const box = [left!, top!, right! - left!, bottom! - top!].map((value) => Math.round(value * scale));
-  const { data } = canvas.getContext('2d')!.getImageData(box[0]!, box[1]!, box[2]!, box[3]!);
+/** Heights of the pixels of a colour, within 24 of 255 in each channel, in a rectangle in CSS pixels. */
+function rowsOf(canvas: HTMLCanvasElement, hex: string, area: readonly number[]): number[] {
+  const [left, top, right, bottom] = area.map((value) => Math.round(value * devicePixelRatio));
+  const width = right! - left!;
+  const { data } = canvas.getContext('2d')!.getImageData(left!, top!, width, bottom! - top!);
   const wanted = [1, 3, 5].map((place) => Number.parseInt(hex.slice(place, place + 2), 16));
-  let found = 0;
+  const rows: number[] = [];
   for (let index = 0; index < data.length; index += 4) {
     const isNear = wanted.every((value, channel) => Math.abs(data[index + channel]! - value) < 24);
-    if (isNear && data[index + 3]! > 200) found += 1;
+    if (isNear && data[index + 3]! > 200) rows.push(Math.floor(index / 4 / width) / devicePixelRatio);
   }
-  return found;
+  return rows;
 }
 
 describe('the chart of a plot', () => {
@@ -58,7 +54,7 @@ describe('the chart of a plot', () => {
     const { chartArea } = Chart.getChart(canvas)!;
     const area = [chartArea.left, chartArea.top, chartArea.right, chartArea.bottom];
     for (const { colour } of sampleCurves()) {
-      expect(count(canvas, colours.curves[colour], area), colour).to.be.greaterThan(50);
+      expect(rowsOf(canvas, colours.curves[colour], area).length, colour).to.be.greaterThan(50);
     }
   });
 
@@ -66,8 +62,14 @@ describe('the chart of a plot', () => {
     const { chartArea } = Chart.getChart(canvas)!;
     // The strip of the letters alone, right of the lines that lead to them.
     const strip = [chartArea.right + 9, 0, chartArea.right + 24, 400];
-    for (const { colour } of sampleCurves()) {
-      expect(count(canvas, colours.curves[colour], strip), colour).to.be.greaterThan(4);
+    const middles = sampleCurves().map(({ colour }) => {
+      const rows = rowsOf(canvas, colours.curves[colour], strip);
+      expect(rows.length, colour).to.be.greaterThan(4);
+      return rows.reduce((sum, row) => sum + row, 0) / rows.length;
+    });
+    // The curves end within 0.5 dB of each other, a letter is about ten pixels high.
+    for (let rank = 1; rank < middles.length; rank += 1) {
+      expect(middles[rank]! - middles[rank - 1]!).to.be.greaterThan(11);
     }
   });
 
