@@ -17,11 +17,30 @@ export const GRID_FREQUENCIES: readonly Hertz[] = [10, 100, 1000, 10_000].flatMa
   Array.from({ length: 9 }, (_, index) => decade * (index + 1)).filter((frequency) => frequency <= PLOT_TO),
 );
 
-/** What people read off, the most useful first: numbers that would touch one before them are left out. */
-const BY_USE: readonly Hertz[] = [1000, 100, 10_000, 20, 50, 500, 5000, 200, 2000, 20_000];
+/** What people read off, the most useful first. The members of a row stand on the axis together, or none of them. */
+const BY_USE: readonly (readonly Hertz[])[] = [
+  [1000],
+  [100, 10_000],
+  [20],
+  [50, 500, 5000],
+  [200, 2000, 20_000],
+];
 
 /** Least room between two numbers on an axis, in pixels. */
 const AIR = 8;
+
+/** A number on the axis with the room it takes, half the air on either side. */
+interface PlacedLabel extends LabelledFrequency {
+  readonly from: number;
+  readonly to: number;
+}
+
+function placed(frequency: Hertz, width: number, digitWidth: number): PlacedLabel {
+  const text = frequency < 1000 ? String(frequency) : `${frequency / 1000}k`;
+  const centre = (Math.log10(frequency / PLOT_FROM) / DECADES) * width;
+  const half = (text.length * digitWidth + AIR) / 2;
+  return { frequency, text, from: centre - half, to: centre + half };
+}
 
 /**
  * The numbers on the frequency axis: 20, 50, 100, 200 … 20k, or fewer where they would touch.
@@ -30,19 +49,14 @@ const AIR = 8;
  * @returns ascending in frequency.
  */
 export function labelledFrequencies(width: number, digitWidth = 7): readonly LabelledFrequency[] {
-  const taken: {
-    readonly frequency: Hertz;
-    readonly text: string;
-    readonly from: number;
-    readonly to: number;
-  }[] = [];
-  for (const frequency of BY_USE) {
-    const text = frequency < 1000 ? String(frequency) : `${frequency / 1000}k`;
-    const centre = (Math.log10(frequency / PLOT_FROM) / DECADES) * width;
-    const half = (text.length * digitWidth + AIR) / 2;
-    const [from, to] = [centre - half, centre + half];
-    if (taken.every((other) => to <= other.from || from >= other.to))
-      taken.push({ frequency, text, from, to });
+  const taken: PlacedLabel[] = [];
+  for (const row of BY_USE) {
+    const labels = row.map((frequency) => placed(frequency, width, digitWidth));
+    const isFree = (label: PlacedLabel): boolean =>
+      [...taken, ...labels].every(
+        (other) => other === label || label.to <= other.from || label.from >= other.to,
+      );
+    if (labels.every(isFree)) taken.push(...labels);
   }
   return taken
     .sort((first, second) => first.frequency - second.frequency)

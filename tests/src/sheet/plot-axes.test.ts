@@ -37,6 +37,15 @@ describe('frequency axis', () => {
 
   it('keeps the most useful numbers on a phone, and none touch', () => {
     expect(labelledFrequencies(220).map(({ text }) => text)).toEqual(['20', '100', '1k', '10k']);
+    expect(labelledFrequencies(340).map(({ text }) => text)).toEqual([
+      '20',
+      '50',
+      '100',
+      '500',
+      '1k',
+      '5k',
+      '10k',
+    ]);
     for (let width = 40; width < 900; width += 7) {
       const places = labelledFrequencies(width).map(({ frequency, text }) => ({
         centre: (Math.log10(frequency / 10) / Math.log10(4000)) * width,
