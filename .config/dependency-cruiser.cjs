@@ -2,7 +2,20 @@
  * The rooms of `src`, lowest first. A room imports only rooms that stand before it; `components`
  * may import all of them. The comment of each rule says what to import instead.
  */
-const rooms = ['parts', 'circuit', 'blocks', 'filter', 'response', 'study', 'clip', 'audio', 'design', 'sheet', 'bench', 'cli'];
+const rooms = [
+  'parts',
+  'circuit',
+  'blocks',
+  'filter',
+  'response',
+  'study',
+  'clip',
+  'audio',
+  'design',
+  'sheet',
+  'bench',
+  'cli',
+];
 
 /** Imports that the order alone would allow, but that would mix up concerns. */
 const strangers = {
@@ -47,10 +60,15 @@ module.exports = {
     },
     {
       name: 'audio-libraries-on-demand',
-      comment: 'Import src/audio/engine-types.ts, or src/audio/engine.ts dynamically: no audio code before it is needed.',
+      comment:
+        'Import src/audio/engine-types.ts, or src/audio/engine.ts dynamically: no audio code before it is needed.',
       severity: 'error',
       from: { path: '^components/' },
-      to: { path: ['^src/audio/', 'node_modules/(tone|standardized-audio-context)/'], dependencyTypesNot: ['type-only', 'dynamic-import'], pathNot: '^src/audio/engine-types\\.ts$' },
+      to: {
+        path: ['^src/audio/', 'node_modules/(tone|standardized-audio-context)/'],
+        dependencyTypesNot: ['type-only', 'dynamic-import'],
+        pathNot: '^src/audio/engine-types\\.ts$',
+      },
     },
     {
       name: 'no-test-imports',

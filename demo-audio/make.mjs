@@ -16,7 +16,7 @@ function wav(steps) {
   bytes.writeUInt16LE(16, 34);
   bytes.write('data', 36);
   bytes.writeUInt32LE(2 * steps.length, 40);
-  steps.forEach((step, index) => bytes.writeInt16LE(step, 44 + 2 * index));
+  for (const [index, step] of steps.entries()) bytes.writeInt16LE(step, 44 + 2 * index);
   return bytes;
 }
 

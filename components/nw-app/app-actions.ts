@@ -1,5 +1,6 @@
 import { DEMO_CLIPS } from '../../demo-audio/clips.ts';
 import type { Bench } from '../../src/bench/bench.ts';
+import { loadFiltering } from '../../src/bench/filtering.ts';
 import type { PageKey } from '../../src/bench/keyboard.ts';
 import type { SwapSession } from '../../src/bench/swap-session.ts';
 import {
@@ -81,7 +82,10 @@ export class AppActions {
       this.#swap.end();
       this.#bench.store.apply(setVariant(slot, variant), `${slot}: ${variant.replaceAll('-', ' ')}`);
     },
-    'nw-view-set': ({ view }) => this.#bench.preferences.set({ plotView: view }),
+    'nw-view-set': ({ view }) => {
+      this.#bench.preferences.set({ plotView: view });
+      if (view !== 'magnitude') void loadFiltering();
+    },
     'nw-blocks-set': ({ show }) => this.#bench.preferences.set({ showBlocks: show }),
     'nw-table-set': ({ show }) => this.#bench.preferences.set({ showTable: show }),
     'nw-pin-set': ({ pinned }) => {

@@ -1,8 +1,10 @@
+import { signal } from '@preact/signals-core';
 import { html, LitElement, nothing, type TemplateResult } from 'lit';
 import { customElement, property, state } from 'lit/decorators.js';
 import { DEMO_CLIPS } from '../../demo-audio/clips.ts';
 import { type Bench, createBench } from '../../src/bench/bench.ts';
-import { BenchExports, type ExportKind } from '../../src/bench/bench-exports.ts';
+import type { ExportKind, RenderProgress } from '../../src/bench/bench-exports.ts';
+import { filtering } from '../../src/bench/filtering.ts';
 import { pageKey, takesKey } from '../../src/bench/keyboard.ts';
 import { lineFigures } from '../../src/bench/line-figures.ts';
 import { matchedVoicings } from '../../src/bench/matched-voicings.ts';
@@ -22,10 +24,8 @@ import '../nw-listen-panel/nw-listen-panel.ts';
 import '../nw-menu/nw-menu.ts';
 import type { MenuItem } from '../nw-menu/nw-menu.ts';
 import '../nw-notice/nw-notice.ts';
-import '../nw-parts-drawer/nw-parts-drawer.ts';
 import '../nw-play-bar/nw-play-bar.ts';
 import '../nw-plot-panel/nw-plot-panel.ts';
-import '../nw-swap-panel/nw-swap-panel.ts';
 import type { NwSwapPanel } from '../nw-swap-panel/nw-swap-panel.ts';
 import '../nw-tabs/nw-tabs.ts';
 import type { NwTabs, Tab } from '../nw-tabs/nw-tabs.ts';
@@ -77,13 +77,7 @@ export class NwApp extends LitElement {
   @state() private dropping = false;
 
   readonly #swap = new SwapSession(this.bench.store, this.bench.settled);
-  readonly #exports = new BenchExports(this.bench, {
-    svg: (title) => this.#drawSvg(title),
-    png: async (title) => {
-      const { rasterise } = await import('../chart/rasterise.ts');
-      return rasterise(await this.#drawSvg(title), 2);
-    },
-  });
+  readonly #rendering = signal<RenderProgress | undefined>(undefined);
   readonly #actions = new AppActions(this.bench, this.#swap);
   readonly #curves = new SignalReader(this, () => this.#readCurves());
   readonly #design = new SignalReader(this, () => ({
@@ -97,7 +91,7 @@ export class NwApp extends LitElement {
     swap: this.#swap.subject.value,
     tried: this.#swap.tried.value,
     series: this.#swap.series.value,
-    rendering: this.#exports.rendering.value,
+    rendering: this.#rendering.value,
   }));
   readonly #sound = new SignalReader(this, () => {
     const { sound } = this.bench;
@@ -123,6 +117,7 @@ export class NwApp extends LitElement {
     window.addEventListener('dragleave', this.#handleDragLeave);
     window.addEventListener('drop', this.#handleDrop);
     this.#watchMeter();
+    setTimeout(() => this.#loadTheRest(), 0);
     if (this.bench.sound.clip.peek() === undefined) this.#actions.chooseClip(DEMO_CLIPS[0]!.id);
   }
 
@@ -152,7 +147,20 @@ export class NwApp extends LitElement {
       pinned: this.bench.pinned.value,
       showBlocks,
       sampleRate: this.bench.sound.sampleRate.value,
+      filtering: filtering.value,
     });
+  }
+
+  async #save(kind: ExportKind): Promise<void> {
+    const { BenchExports } = await import('../../src/bench/bench-exports.ts');
+    const plot = {
+      svg: (title: string) => this.#drawSvg(title),
+      png: async (title: string) => {
+        const { rasterise } = await import('../chart/rasterise.ts');
+        return rasterise(await this.#drawSvg(title), 2);
+      },
+    };
+    await new BenchExports(this.bench, plot, this.#rendering).save(kind);
   }
 
   async #drawSvg(title: string): Promise<string> {
@@ -163,6 +171,12 @@ export class NwApp extends LitElement {
       quantity: view,
       reference: REFERENCE[view],
     });
+  }
+
+  /** Elements that the first screen does not show come after it. */
+  #loadTheRest(): void {
+    void import('../nw-parts-drawer/nw-parts-drawer.ts');
+    void import('../nw-swap-panel/nw-swap-panel.ts');
   }
 
   /** Position and level move by themselves while something plays: they are fetched once a frame. */
@@ -328,7 +342,7 @@ export class NwApp extends LitElement {
         <nw-menu
           label="Save a copy"
           .items=${EXPORTS}
-          @nw-choose=${(event: CustomEvent<{ id: string }>) => this.#exports.save(event.detail.id as ExportKind)}
+          @nw-choose=${(event: CustomEvent<{ id: string }>) => this.#save(event.detail.id as ExportKind)}
         ></nw-menu>
       </nw-header>
       <div class="middle ${this.dropping ? 'dropping' : ''}">

@@ -1,4 +1,4 @@
-import { signal } from '@preact/signals-core';
+import type { Signal } from '@preact/signals-core';
 import { messageOf } from '../errors.ts';
 import { fileName } from '../sheet/file-name.ts';
 import type { WavBits } from '../sheet/wav.ts';
@@ -26,13 +26,16 @@ export interface PlotDrawing {
 export class BenchExports {
   readonly #bench: Bench;
   readonly #plot: PlotDrawing;
-  /** The rendering under way; undefined for none. */
-  readonly rendering = signal<RenderProgress | undefined>(undefined);
+  readonly #rendering: Signal<RenderProgress | undefined>;
 
-  /** @param plot draws the present plot, as a picture and as vectors. */
-  constructor(bench: Bench, plot: PlotDrawing) {
+  /**
+   * @param plot draws the present plot, as a picture and as vectors.
+   * @param rendering is told of a rendering under way; undefined while there is none.
+   */
+  constructor(bench: Bench, plot: PlotDrawing, rendering: Signal<RenderProgress | undefined>) {
     this.#bench = bench;
     this.#plot = plot;
+    this.#rendering = rendering;
   }
 
   #name(what: string, ending: string): string {
@@ -66,10 +69,10 @@ export class BenchExports {
   /** The recording through the line, at its own rate, at the loudness that is heard. */
   async #saveWav(bits: WavBits): Promise<void> {
     const clip = this.#bench.sound.clip.peek();
-    if (clip === undefined || this.rendering.peek() !== undefined) return;
+    if (clip === undefined || this.#rendering.peek() !== undefined) return;
     const abort = new AbortController();
     const progress = (share: number): void => {
-      this.rendering.value = {
+      this.#rendering.value = {
         share,
         cancel: () => abort.abort(new DOMException('cancelled', 'AbortError')),
       };
@@ -92,7 +95,7 @@ export class BenchExports {
       });
       saveFile(writeWav(rendered, bits), this.#name(`${clip.title} ${letter}`, 'wav'), 'audio/wav');
     } finally {
-      this.rendering.value = undefined;
+      this.#rendering.value = undefined;
     }
   }
 }

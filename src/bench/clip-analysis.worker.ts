@@ -1,7 +1,8 @@
 import { serve } from '../audio/worker-port.ts';
 import type { Clip } from '../clip/clip.ts';
+import type { WeightedSpectrum } from '../clip/loudness-through.ts';
 import { type Overview, overviewOf } from '../clip/overview.ts';
-import { type WeightedSpectrum, weightedSpectrum } from '../clip/weighted-spectrum.ts';
+import { weightedSpectrum } from '../clip/weighted-spectrum.ts';
 
 /** What the page asks: a waveform of so many buckets, or the spectrum that loudness is told from. */
 export type ClipQuestion =

@@ -1,5 +1,5 @@
 import type { SpanTransfer } from '../blocks/span.ts';
-import { loudnessThrough, type WeightedSpectrum } from '../clip/weighted-spectrum.ts';
+import { loudnessThrough, type WeightedSpectrum } from '../clip/loudness-through.ts';
 import { digitalMagnitudeInto } from '../filter/digital-response.ts';
 import type { Decibels, Hertz } from '../units.ts';
 import { lineFilters } from './line-filters.ts';

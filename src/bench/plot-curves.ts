@@ -1,13 +1,10 @@
 import type { SlotName } from '../blocks/block.ts';
-import type { SpanTransfer } from '../blocks/span.ts';
 import type { VoicingLetter } from '../design/design.ts';
-import { digitalMagnitudeInto } from '../filter/digital-response.ts';
-import { phaseInto } from '../response/curve.ts';
 import { DEFAULT_GRID } from '../response/grid.ts';
 import { DASHES, type PlotCurve, type PlotQuantity } from '../sheet/plot-model.ts';
 import type { Hertz } from '../units.ts';
+import type { Filtering } from './filtering.ts';
 import type { LineAnalysis } from './line-analysis.ts';
-import { lineFilters } from './line-filters.ts';
 
 /** A voicing as the plot needs it. */
 export interface DrawnVoicing {
@@ -27,6 +24,8 @@ export interface PlotRequest {
   readonly showBlocks: boolean;
   /** Rate of the digital filters, for the view `difference`. */
   readonly sampleRate: Hertz;
+  /** What the views other than the level need; undefined until it is loaded. */
+  readonly filtering: Filtering | undefined;
 }
 
 const BLOCK_LETTERS: Readonly<Record<SlotName, string>> = {
@@ -48,30 +47,10 @@ const BLOCK_DASHES: Readonly<Record<SlotName, readonly number[]>> = {
   speaker: [2, 2],
 };
 
-function linePhase(spans: readonly SpanTransfer[]): Float64Array {
-  const sum = new Float64Array(DEFAULT_GRID.frequencies.length);
-  const share = new Float64Array(sum.length);
-  for (const { transfer } of spans) {
-    phaseInto(share, transfer, DEFAULT_GRID);
-    for (let point = 0; point < sum.length; point += 1) sum[point] = sum[point]! + share[point]!;
-  }
-  return sum;
-}
-
-/** Level of the digital filters less that of the circuit; NaN above half the sample rate. */
-function lineDifference({ spans, response }: LineAnalysis, sampleRate: Hertz): Float64Array {
-  const sum = response.magnitude.map((value) => -value);
-  const share = new Float64Array(sum.length);
-  for (const { sections } of lineFilters(spans, sampleRate)) {
-    digitalMagnitudeInto(share, sections, DEFAULT_GRID.frequencies, sampleRate);
-    for (let point = 0; point < sum.length; point += 1) sum[point] = sum[point]! + share[point]!;
-  }
-  return sum;
-}
-
-function valuesOf(analysis: LineAnalysis, { view, sampleRate }: PlotRequest): Float64Array {
+function valuesOf(analysis: LineAnalysis, { view, sampleRate, filtering }: PlotRequest): Float64Array {
   if (view === 'magnitude') return analysis.response.magnitude;
-  return view === 'phase' ? linePhase(analysis.spans) : lineDifference(analysis, sampleRate);
+  if (filtering === undefined) return new Float64Array(DEFAULT_GRID.frequencies.length).fill(Number.NaN);
+  return view === 'phase' ? filtering.linePhase(analysis) : filtering.lineDifference(analysis, sampleRate);
 }
 
 /** The curves of a plot, faint ones first. */

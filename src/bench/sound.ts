@@ -2,14 +2,13 @@ import { computed, effect, type ReadonlySignal, signal } from '@preact/signals-c
 import type { Engine, MeterReading, Region } from '../audio/engine-types.ts';
 import { WorkerPort } from '../audio/worker-port.ts';
 import { type Clip, durationOf, regionOf } from '../clip/clip.ts';
+import type { WeightedSpectrum } from '../clip/loudness-through.ts';
 import type { Overview } from '../clip/overview.ts';
-import type { WeightedSpectrum } from '../clip/weighted-spectrum.ts';
 import { messageOf, NotchworkError } from '../errors.ts';
 import type { Decibels, Hertz, Seconds } from '../units.ts';
 import type { ClipQuestion } from './clip-analysis.worker.ts';
+import { filtering, loadFiltering } from './filtering.ts';
 import type { LineAnalysis } from './line-analysis.ts';
-import { lineFilters } from './line-filters.ts';
-import { matchingGain } from './matching.ts';
 
 /** The recording on the bench. */
 export interface BenchClip {
@@ -116,9 +115,10 @@ export class BenchSound {
    */
   gainOf({ spans }: LineAnalysis): Decibels | undefined {
     const spectrum = this.#spectrum.value;
-    if (spectrum === undefined) return undefined;
+    const parts = filtering.value;
+    if (spectrum === undefined || parts === undefined) return undefined;
     try {
-      return matchingGain(spectrum, spans, this.sampleRate.value);
+      return parts.matchingGain(spectrum, spans, this.sampleRate.value);
     } catch {
       return undefined; // an unstable line: it is muted, and the reason stands with it
     }
@@ -129,9 +129,10 @@ export class BenchSound {
     const engine = this.#engine.value;
     const { spans, problem } = this.#inputs.line.value;
     const gain = this.#inputs.matched.value ? (this.gain.value ?? 0) : 0;
-    if (engine === undefined) return;
+    const parts = filtering.value;
+    if (engine === undefined || parts === undefined) return;
     try {
-      engine.setLine({ filters: lineFilters(spans, engine.sampleRate), gain });
+      engine.setLine({ filters: parts.lineFilters(spans, engine.sampleRate), gain });
       engine.setMuted(problem !== undefined);
     } catch (error) {
       engine.setMuted(true);
@@ -160,7 +161,12 @@ export class BenchSound {
       this.#clip.value = { id, title, clip, overview: undefined };
       if (notice !== undefined) this.#message.value = { kind: 'caution', text: notice };
       this.#loading.value = undefined;
-      await Promise.all([this.#drawOverview(clip, signal), this.#analyse(), this.#loadIntoEngine()]);
+      await Promise.all([
+        loadFiltering(),
+        this.#drawOverview(clip, signal),
+        this.#analyse(),
+        this.#loadIntoEngine(),
+      ]);
     } catch (error) {
       if (isAbort(error)) return;
       this.#message.value = { kind: 'error', text: messageOf(error) };
@@ -227,7 +233,7 @@ export class BenchSound {
     const present = this.#engine.peek();
     if (present !== undefined && present.sampleRate === rate && present.state.peek().sound !== 'closed')
       return;
-    const { createEngine } = await import('../audio/engine.ts');
+    const [{ createEngine }] = await Promise.all([import('../audio/engine.ts'), loadFiltering()]);
     const engine = await createEngine({ sampleRate: rate });
     this.#loadedInEngine = undefined;
     this.#engine.value = engine;

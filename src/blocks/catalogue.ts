@@ -1,18 +1,29 @@
 import { NotchworkError } from '../errors.ts';
 import type { Block, BlockSettings, SlotName } from './block.ts';
+import { driverCathodeFollower } from './driver-cathode-follower.ts';
 import { driverPlainSource } from './driver-plain-source.ts';
+import { driverPlate } from './driver-plate.ts';
+import { inputGrid } from './input-grid.ts';
 import { powerFeedback } from './power-feedback.ts';
+import { speakerResistive } from './speaker-resistive.ts';
+import { stageCommonCathode } from './stage-common-cathode.ts';
+import { toneBaxandall } from './tone-baxandall.ts';
+import { toneBridgedT } from './tone-bridged-t.ts';
+import { toneFixedMiddle } from './tone-fixed-middle.ts';
+import { toneJames } from './tone-james.ts';
 import { toneThreeKnob } from './tone-three-knob.ts';
+import { toneTrebleCut } from './tone-treble-cut.ts';
+import { volumeBright } from './volume-bright.ts';
 
 /** Every block there is, by slot; the first one of a slot is a new design's. */
 const CATALOGUE: Readonly<Record<SlotName, readonly Block[]>> = {
-  input: [],
-  stage: [],
-  volume: [],
-  driver: [driverPlainSource],
-  tone: [toneThreeKnob],
+  input: [inputGrid],
+  stage: [stageCommonCathode],
+  volume: [volumeBright],
+  driver: [driverPlainSource, driverCathodeFollower, driverPlate],
+  tone: [toneThreeKnob, toneFixedMiddle, toneJames, toneBaxandall, toneTrebleCut, toneBridgedT],
   power: [powerFeedback],
-  speaker: [],
+  speaker: [speakerResistive],
 };
 
 /** The blocks that a slot can hold. */

@@ -1,5 +1,5 @@
 import type { BlockSettings } from './block.ts';
-import { type PlacedBlock, type SpanTransfer, spanTransfer, spansOf } from './span.ts';
+import { type PlacedBlock, type SpanTransfer, spansOf, spanTransfer } from './span.ts';
 
 interface Remembered {
   readonly settings: readonly BlockSettings[];

@@ -126,24 +126,72 @@ export const powerFeedback: Block = {
     },
   },
   referenceKnobs: { presence: rotation(0) },
-  elements(settings) {
+  elements(settings, neighbours) {
     const tail: readonly BlockElement[] =
       settings.choices['presenceCircuit'] === 'across-tail'
         ? [
             { kind: 'resistor', name: 'tailResistor', nodes: ['tail', '0'], value: { part: 'tailResistor' } },
-            { kind: 'capacitor', name: 'presenceCap', nodes: ['tail', 'lift'], value: { part: 'presenceCap' } },
-            { kind: 'resistor', name: 'presence', nodes: ['lift', '0'], value: { knob: 'presence', side: 'upper' } },
+            {
+              kind: 'capacitor',
+              name: 'presenceCap',
+              nodes: ['tail', 'lift'],
+              value: { part: 'presenceCap' },
+            },
+            {
+              kind: 'resistor',
+              name: 'presence',
+              nodes: ['lift', '0'],
+              value: { knob: 'presence', side: 'upper' },
+            },
           ]
         : [
-            { kind: 'resistor', name: 'presenceUpper', nodes: ['tail', 'wiper'], value: { knob: 'presence', side: 'upper' } },
-            { kind: 'resistor', name: 'presenceLower', nodes: ['wiper', '0'], value: { knob: 'presence', side: 'lower' } },
+            {
+              kind: 'resistor',
+              name: 'presenceUpper',
+              nodes: ['tail', 'wiper'],
+              value: { knob: 'presence', side: 'upper' },
+            },
+            {
+              kind: 'resistor',
+              name: 'presenceLower',
+              nodes: ['wiper', '0'],
+              value: { knob: 'presence', side: 'lower' },
+            },
             { kind: 'capacitor', name: 'presenceCap', nodes: ['wiper', '0'], value: { part: 'presenceCap' } },
           ];
+    // The speaker's block, where it is in the line, is the load instead.
+    const load: readonly BlockElement[] =
+      neighbours.after?.slot === 'speaker'
+        ? []
+        : [
+            {
+              kind: 'resistor',
+              name: 'loadResistance',
+              nodes: ['out', '0'],
+              value: { part: 'loadResistance' },
+            },
+          ];
     return [
-      { kind: 'voltage-gain', name: 'gain', nodes: ['plate', '0'], control: ['in', 'tail'], value: { part: 'gain' } },
-      { kind: 'resistor', name: 'sourceImpedance', nodes: ['plate', 'out'], value: { part: 'sourceImpedance' } },
-      { kind: 'resistor', name: 'loadResistance', nodes: ['out', '0'], value: { part: 'loadResistance' } },
-      { kind: 'resistor', name: 'feedbackResistor', nodes: ['out', 'tail'], value: { part: 'feedbackResistor' } },
+      {
+        kind: 'voltage-gain',
+        name: 'gain',
+        nodes: ['plate', '0'],
+        control: ['in', 'tail'],
+        value: { part: 'gain' },
+      },
+      {
+        kind: 'resistor',
+        name: 'sourceImpedance',
+        nodes: ['plate', 'out'],
+        value: { part: 'sourceImpedance' },
+      },
+      ...load,
+      {
+        kind: 'resistor',
+        name: 'feedbackResistor',
+        nodes: ['out', 'tail'],
+        value: { part: 'feedbackResistor' },
+      },
       ...tail,
     ];
   },

@@ -74,7 +74,10 @@ function joinElements(run: readonly PlacedBlock[], count: number, around: Neighb
       before: owner === 0 ? around.before : run[owner - 1]!.block,
       after: owner === count - 1 ? (count === run.length ? around.after : undefined) : run[owner + 1]!.block,
     };
-    const place = (pair: NodePair): NodePair => [joinedNode(run, owner, pair[0]), joinedNode(run, owner, pair[1])];
+    const place = (pair: NodePair): NodePair => [
+      joinedNode(run, owner, pair[0]),
+      joinedNode(run, owner, pair[1]),
+    ];
     return block.elements(settings, neighbours).map((source): SpanElement => {
       const name = `${block.slot}.${source.name}`;
       const element: Element =
@@ -134,7 +137,12 @@ export function spansOf(placed: readonly PlacedBlock[]): readonly Span[] {
   );
 }
 
-function valueOf(source: BlockElement['value'], values: BlockValues, parts: BlockSettings['parts'], block: Block): number {
+function elementValue(
+  source: BlockElement['value'],
+  values: BlockValues,
+  parts: BlockSettings['parts'],
+  block: Block,
+): number {
   if ('part' in source) return values.part(source.part);
   if ('knob' in source) {
     const total = parts[block.knobs[source.knob]!.part]!;
@@ -152,7 +160,7 @@ export function elementValues(
 ): Float64Array {
   const readers = settings.map(valuesOf);
   return Float64Array.from(circuit.elements, ({ source, owner }) =>
-    valueOf(source.value, readers[owner]!, settings[owner]!.parts, blocks[owner]!.block),
+    elementValue(source.value, readers[owner]!, settings[owner]!.parts, blocks[owner]!.block),
   );
 }
 

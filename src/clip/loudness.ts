@@ -1,15 +1,11 @@
 import type { Lufs, Seconds } from '../units.ts';
 import type { Clip } from './clip.ts';
+import { ABSOLUTE_GATE, gatedLoudness, loudnessOf } from './gating.ts';
 import { kWeighted } from './k-weighting.ts';
 
 /** Length of a gating block, in seconds, and how far the next one is. */
 export const BLOCK: Seconds = 0.4;
 export const HOP: Seconds = 0.1;
-
-/** Blocks quieter than this never count. */
-const ABSOLUTE_GATE: Lufs = -70;
-/** Blocks this far under the loudness of what passed the first gate do not count either. */
-const RELATIVE_GATE = -10;
 
 /** A loudness, or why there is none. */
 export type Loudness =
@@ -18,41 +14,11 @@ export type Loudness =
   | { readonly kind: 'short'; readonly lufs: Lufs }
   | { readonly kind: 'silent' };
 
-/** Loudness of a K-weighted mean square, summed over channels by their weights. */
-export function loudnessOf(weightedPower: number): Lufs {
-  return -0.691 + 10 * Math.log10(weightedPower);
-}
-
 /** Weight of a channel: 1 for left, right and centre, 1.41 for the surrounds of five, 0 for the low-frequency channel of six. */
 export function channelWeight(channel: number, count: number): number {
   if (count === 6 && channel === 3) return 0;
   const firstSurround = count >= 6 ? 4 : 3;
   return count >= 5 && channel >= firstSurround ? 1.41 : 1;
-}
-
-/**
- * The gated mean of block powers (ITU-R BS.1770-5, Annex 1, equations 4 to 7).
- *
- * @param powers K-weighted mean square of every block, channels summed.
- * @returns the loudness, or undefined where every block is gated out.
- */
-export function gatedLoudness(powers: ArrayLike<number>): Lufs | undefined {
-  const meanAbove = (threshold: Lufs): number | undefined => {
-    let sum = 0;
-    let count = 0;
-    for (let index = 0; index < powers.length; index += 1) {
-      const power = powers[index]!;
-      if (power > 0 && loudnessOf(power) > threshold) {
-        sum += power;
-        count += 1;
-      }
-    }
-    return count === 0 ? undefined : sum / count;
-  };
-  const first = meanAbove(ABSOLUTE_GATE);
-  if (first === undefined) return undefined;
-  const second = meanAbove(Math.max(ABSOLUTE_GATE, loudnessOf(first) + RELATIVE_GATE));
-  return second === undefined ? undefined : loudnessOf(second);
 }
 
 /** K-weighted mean square of every gating block, channels summed by their weights. */

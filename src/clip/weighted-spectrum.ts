@@ -1,8 +1,9 @@
 import FFT from 'fft.js';
-import type { Hertz, Lufs } from '../units.ts';
+import type { Hertz } from '../units.ts';
 import type { Clip } from './clip.ts';
 import { kWeighted, kWeighting } from './k-weighting.ts';
-import { BLOCK, channelWeight, gatedLoudness, HOP, loudnessOf } from './loudness.ts';
+import { BLOCK, channelWeight, HOP } from './loudness.ts';
+import type { WeightedSpectrum } from './loudness-through.ts';
 
 /** Bands a decade, and where they begin and end. */
 const BANDS_PER_DECADE = 24;
@@ -14,20 +15,6 @@ const HIGHEST: Hertz = 23_900;
  * semitone beside them, short enough for the gates.
  */
 const WINDOW_HOPS = 3;
-
-/**
- * K-weighted power of a clip, block by block, in narrow bands: enough to know its loudness through
- * any filter whose response is smooth over a band.
- */
-export interface WeightedSpectrum {
-  /** Centre of every band, in hertz. */
-  readonly bands: Float64Array;
-  /** Power of block b in band k at `b·bands.length + k`. */
-  readonly powers: Float32Array;
-  readonly blocks: number;
-  /** Whether the clip was shorter than a gating block; no gates apply then. */
-  readonly short: boolean;
-}
 
 function bandCentres(): Float64Array {
   const count = Math.floor(Math.log10(HIGHEST / LOWEST) * BANDS_PER_DECADE);
@@ -128,26 +115,4 @@ export function weightedSpectrum(clip: Clip): WeightedSpectrum {
     }
   }
   return { bands, powers, blocks, short };
-}
-
-/**
- * Integrated loudness of the clip after a linear filter, gates included.
- *
- * @param gain the filter's power gain |H|² at each of the spectrum's bands.
- * @returns undefined where every block is gated out: silence.
- */
-export function loudnessThrough(spectrum: WeightedSpectrum, gain: ArrayLike<number>): Lufs | undefined {
-  const { bands, powers, blocks, short } = spectrum;
-  const count = bands.length;
-  const filtered = new Float64Array(blocks);
-  for (let block = 0; block < blocks; block += 1) {
-    let sum = 0;
-    for (let band = 0, at = block * count; band < count; band += 1, at += 1) {
-      // Bands above half the sample rate hold nothing, and a digital filter has no gain there.
-      if (powers[at]! > 0) sum += powers[at]! * gain[band]!;
-    }
-    filtered[block] = sum;
-  }
-  if (!short) return gatedLoudness(filtered);
-  return filtered[0]! > 1e-12 ? loudnessOf(filtered[0]!) : undefined;
 }

@@ -1,8 +1,8 @@
 import type { SlotName } from '../blocks/block.ts';
 import type { SpanTransfer } from '../blocks/span.ts';
+import { magnitudeAtSquares } from '../filter/magnitude.ts';
 import { magnitudeAt, type TransferFunction } from '../transfer-function.ts';
 import { type Decibels, decibels, type Hertz, radiansPerSecond } from '../units.ts';
-import { magnitudeInto } from './curve.ts';
 import type { FrequencyGrid } from './grid.ts';
 
 /** What one block adds to the line: its response with everything before it, over theirs without it. */
@@ -26,7 +26,7 @@ function magnitudeOf(transfer: TransferFunction, grid: FrequencyGrid): Float64Ar
   const known = sampled.get(transfer);
   if (known?.grid === grid) return known.magnitude;
   const magnitude = new Float64Array(grid.frequencies.length);
-  magnitudeInto(magnitude, transfer, grid);
+  magnitudeAtSquares(magnitude, transfer, grid.omegaSquared);
   sampled.set(transfer, { grid, magnitude });
   return magnitude;
 }

@@ -85,9 +85,7 @@ async function step(title, action) {
 }
 
 await ensureChromium();
-await step('format and lint', () =>
-  tool('lint', 'biome', ['check', '--config-path=.config', '--error-on-warnings', '.']),
-);
+await step('format and lint', () => tool('lint', 'biome', ['check', '--error-on-warnings', '.']));
 await step('types', () => tool('types', 'tsc', ['--noEmit']));
 await step('types of the pure rooms, without the DOM', () =>
   tool('pure types', 'tsc', ['--noEmit', '--project', '.config/tsconfig.pure.json']),

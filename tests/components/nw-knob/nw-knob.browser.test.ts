@@ -24,7 +24,15 @@ function record(knob: NwKnob): string[] {
 
 function pointer(knob: NwKnob, type: string, clientY: number, more: PointerEventInit = {}): void {
   dial(knob).dispatchEvent(
-    new PointerEvent(type, { pointerId: 1, clientY, button: 0, bubbles: true, composed: true, cancelable: true, ...more }),
+    new PointerEvent(type, {
+      pointerId: 1,
+      clientY,
+      button: 0,
+      bubbles: true,
+      composed: true,
+      cancelable: true,
+      ...more,
+    }),
   );
 }
 
@@ -45,8 +53,15 @@ describe('nw-knob', () => {
   });
 
   for (const [key, expected] of [
-    ['ArrowUp', 0.51], ['ArrowRight', 0.51], ['ArrowDown', 0.49], ['ArrowLeft', 0.49],
-    ['PageUp', 0.6], ['PageDown', 0.4], ['Home', 0], ['End', 1], ['Delete', 0.6],
+    ['ArrowUp', 0.51],
+    ['ArrowRight', 0.51],
+    ['ArrowDown', 0.49],
+    ['ArrowLeft', 0.49],
+    ['PageUp', 0.6],
+    ['PageDown', 0.4],
+    ['Home', 0],
+    ['End', 1],
+    ['Delete', 0.6],
   ] as const) {
     it(`answers ${key}`, async () => {
       const knob = await knobOf();

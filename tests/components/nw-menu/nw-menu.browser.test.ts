@@ -4,7 +4,12 @@ import '../../../components/nw-menu/nw-menu.ts';
 import type { NwMenu } from '../../../components/nw-menu/nw-menu.ts';
 import { expectAccessibleInBothThemes, setTheme } from '../both-themes.ts';
 
-const ITEMS = [{ id: 'one', label: 'One' }, { id: 'two', label: 'Two', note: 'the second' }, { id: 'off', label: 'Off', disabled: true }, { id: 'four', label: 'Four' }];
+const ITEMS = [
+  { id: 'one', label: 'One' },
+  { id: 'two', label: 'Two', note: 'the second' },
+  { id: 'off', label: 'Off', disabled: true },
+  { id: 'four', label: 'Four' },
+];
 
 describe('nw-menu', () => {
   const make = async (): Promise<NwMenu> => {
@@ -49,7 +54,11 @@ describe('nw-menu', () => {
     await sendKeys({ press: 'ArrowDown' });
     await sendKeys({ press: 'Enter' });
     await menu.updateComplete;
-    expect([chosen, focused(menu), menu.shadowRoot!.querySelector('.list')]).to.deep.equal(['two', 'Save a copy', null]);
+    expect([chosen, focused(menu), menu.shadowRoot!.querySelector('.list')]).to.deep.equal([
+      'two',
+      'Save a copy',
+      null,
+    ]);
   });
 
   it('closes on Escape and when the focus leaves it', async () => {

@@ -16,8 +16,13 @@ describe('nw-notice', () => {
   }
 
   it('is an alert only where it is an error', async () => {
-    const role = async (kind: NwNotice['kind']) => (await make(kind)).shadowRoot!.querySelector('.box')!.getAttribute('role');
-    expect([await role('error'), await role('caution'), await role('info')]).to.deep.equal(['alert', 'note', 'note']);
+    const role = async (kind: NwNotice['kind']) =>
+      (await make(kind)).shadowRoot!.querySelector('.box')!.getAttribute('role');
+    expect([await role('error'), await role('caution'), await role('info')]).to.deep.equal([
+      'alert',
+      'note',
+      'note',
+    ]);
   });
 
   it('can be put away only where that is allowed', async () => {

@@ -6,7 +6,9 @@ import { expectAccessibleInBothThemes, setTheme } from '../both-themes.ts';
 describe('nw-part-chip', () => {
   const make = async (chosen = false): Promise<NwPartChip> => {
     setTheme(undefined);
-    return fixture<NwPartChip>(html`<nw-part-chip label="Treble cap" value="390 pF" .chosen=${chosen}></nw-part-chip>`);
+    return fixture<NwPartChip>(
+      html`<nw-part-chip label="Treble cap" value="390 pF" .chosen=${chosen}></nw-part-chip>`,
+    );
   };
 
   it('is accessible in both themes, chosen or not', async () => {

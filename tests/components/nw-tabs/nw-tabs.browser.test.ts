@@ -11,13 +11,20 @@ describe('nw-tabs', () => {
     setTheme(undefined);
     return fixture<NwTabs>(html`<nw-tabs label="Tasks" .tabs=${TABS} chosen="listen"><p>Panel</p></nw-tabs>`);
   };
-  const tabs = (element: NwTabs): HTMLElement[] => [...element.shadowRoot!.querySelectorAll<HTMLElement>('[role=tab]')];
+  const tabs = (element: NwTabs): HTMLElement[] => [
+    ...element.shadowRoot!.querySelectorAll<HTMLElement>('[role=tab]'),
+  ];
 
   it('is accessible in both themes', async () => {
     await expectAccessibleInBothThemes(await make());
   });
 
-  for (const [key, expected] of [['ArrowRight', 'swap'], ['ArrowLeft', 'sheet'], ['End', 'sheet'], ['Home', 'listen']] as const) {
+  for (const [key, expected] of [
+    ['ArrowRight', 'swap'],
+    ['ArrowLeft', 'sheet'],
+    ['End', 'sheet'],
+    ['Home', 'listen'],
+  ] as const) {
     it(`answers ${key}`, async () => {
       const element = await make();
       tabs(element)[0]!.focus();

@@ -12,7 +12,8 @@ async function fieldOf(value = 390e-12): Promise<NwValueField> {
 }
 
 const input = (field: NwValueField): HTMLInputElement => field.shadowRoot!.querySelector('input')!;
-const message = (field: NwValueField): string => field.shadowRoot!.querySelector('.message')!.textContent!.trim();
+const message = (field: NwValueField): string =>
+  field.shadowRoot!.querySelector('.message')!.textContent!.trim();
 
 /** Types a text over what is there and leaves the field. */
 async function enter(field: NwValueField, text: string): Promise<void> {
@@ -48,7 +49,13 @@ describe('nw-value-field', () => {
   it('keeps what was typed and the last good value, and says what it accepts', async () => {
     const field = await fieldOf();
     const told = record(field);
-    for (const [text, words] of [['223', /not guessed/], ['abc', /22n/], ['5', /out of range.*1\u202fpF to 1\u202fµF/], ['1e30', /out of range/], ['0', /out of range/]] as const) {
+    for (const [text, words] of [
+      ['223', /not guessed/],
+      ['abc', /22n/],
+      ['5', /out of range.*1\u202fpF to 1\u202fµF/],
+      ['1e30', /out of range/],
+      ['0', /out of range/],
+    ] as const) {
       await enter(field, text);
       expect(input(field).value, text).to.equal(text);
       expect(message(field), text).to.match(words);

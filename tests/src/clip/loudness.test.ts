@@ -1,7 +1,8 @@
 import { readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { regionOf } from '../../../src/clip/clip.ts';
-import { channelWeight, gatedLoudness, measureLoudness } from '../../../src/clip/loudness.ts';
+import { gatedLoudness } from '../../../src/clip/gating.ts';
+import { channelWeight, measureLoudness } from '../../../src/clip/loudness.ts';
 import { readWav } from '../../../src/clip/wav-reader.ts';
 import { sine, whiteNoise } from './signals.ts';
 

@@ -162,9 +162,9 @@ describe('writing WAV', () => {
     for (const bits of [24, 32] as const) {
       const back = readWav(writeWav(clip, bits));
       expect(back.frames).toBe(clip.frames);
-      back.channels[1]!.forEach((value, index) =>
-        expect(Math.abs(value - clip.channels[1]![index]!)).toBeLessThanOrEqual(2 ** -24),
-      );
+      for (const [index, value] of back.channels[1]!.entries()) {
+        expect(Math.abs(value - clip.channels[1]![index]!)).toBeLessThanOrEqual(2 ** -24);
+      }
     }
   });
 });
