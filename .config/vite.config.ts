@@ -26,6 +26,7 @@ export default defineConfig({
   base: './',
   publicDir: false,
   plugins: [shorterTemplates()],
+  resolve: { alias: { '@kurkle/color': `${root}components/chart/no-colour-arithmetic.ts` } },
   worker: { format: 'es' },
   build: {
     outDir: 'dist/page',

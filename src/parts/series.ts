@@ -1,4 +1,5 @@
-import { NotchworkError } from '../errors.ts';
+import { assertRange, NotchworkError } from '../errors.ts';
+import { fromDigits } from './decimal.ts';
 
 /** Name of a series of preferred values of IEC 60063; the number is how many there are in a decade. */
 export type SeriesName = 'E3' | 'E6' | 'E12' | 'E24' | 'E48' | 'E96' | 'E192';
@@ -30,7 +31,11 @@ const TABLES: Readonly<Record<SeriesName, { readonly digits: readonly number[]; 
   E192: { digits: threeDigits(192), scale: 2 },
 };
 
-/** Tolerance with which parts of a series are usually sold, in per cent (IEC 60063, introduction). */
+/**
+ * Tolerance with which parts of a series are usually sold, in per cent, both ways: IEC 60063 gives it
+ * beside its tables (from memory). E3 has none in the standard beyond "over 20 %"; 40 % lets its
+ * values meet half-way (common practice, no source).
+ */
 export const SERIES_TOLERANCE: Readonly<Record<SeriesName, number>> = {
   E3: 40,
   E6: 20,
@@ -44,15 +49,25 @@ export const SERIES_TOLERANCE: Readonly<Record<SeriesName, number>> = {
 /** The values of a series in one decade, 1 to just under 10. */
 export function seriesValues(series: SeriesName): readonly number[] {
   const { digits, scale } = TABLES[series];
-  return digits.map((value) => Number(`${value}e-${scale}`));
+  return digits.map((value) => fromDigits(String(value), -scale));
 }
 
-function assertPositive(value: number): void {
-  if (!(value > 0 && Number.isFinite(value))) {
+/** Values served. Far wider than any part; inside it no step or comparison leaves the doubles. */
+const SMALLEST = 1e-60;
+const LARGEST = 1e60;
+
+function assertServed(value: number): void {
+  if (!(value >= SMALLEST && value <= LARGEST)) {
     throw new NotchworkError(
       'value-out-of-range',
-      `${value} has no preferred value near it; only finite values above 0 have.`,
+      `${value} has no preferred value near it; only values above 0, from ${SMALLEST} to ${LARGEST}, have.`,
     );
+  }
+}
+
+function assertWhole(name: string, count: number): void {
+  if (!Number.isSafeInteger(count)) {
+    throw new NotchworkError('value-out-of-range', `${name} is ${count}; it must be a whole number.`);
   }
 }
 
@@ -60,46 +75,63 @@ function assertPositive(value: number): void {
 function valueAt(series: SeriesName, place: number): number {
   const { digits, scale } = TABLES[series];
   const decade = Math.floor(place / digits.length);
-  // Through the decimal literal, so that 4.7e-9 is exactly what somebody would type.
-  return Number(`${digits[place - decade * digits.length]}e${decade - scale}`);
+  return fromDigits(String(digits[place - decade * digits.length]), decade - scale);
 }
+
+/** How far a value may be off a member and still be it: the rounding of a calculation, no part's tolerance. */
+const SAME = 1e-9;
 
 /** Place of the largest value of the series that is not above `value`, rounding apart. */
 function placeAtOrBelow(series: SeriesName, value: number): number {
-  const count = TABLES[series].digits.length;
-  let place = Math.floor(Math.log10(value)) * count + Math.floor((Math.log10(value) % 1) * count);
-  while (valueAt(series, place) > value * (1 + 1e-9)) place -= 1;
-  while (valueAt(series, place + 1) <= value * (1 + 1e-9)) place += 1;
+  // The series is near enough geometric for the logarithm to land within a place or two.
+  let place = Math.floor(Math.log10(value) * TABLES[series].digits.length);
+  while (valueAt(series, place) > value * (1 + SAME)) place -= 1;
+  while (valueAt(series, place + 1) <= value * (1 + SAME)) place += 1;
   return place;
 }
 
-/** The value of a series nearest in ratio. @throws NotchworkError `value-out-of-range` unless above 0. */
+/**
+ * The value of a series nearest in ratio (the smaller of two equally near).
+ *
+ * @throws NotchworkError `value-out-of-range` unless the value is from 1e-60 to 1e60.
+ */
 export function nearest(value: number, series: SeriesName): number {
-  assertPositive(value);
-  const below = valueAt(series, placeAtOrBelow(series, value));
-  const above = valueAt(series, placeAtOrBelow(series, value) + 1);
+  assertServed(value);
+  const place = placeAtOrBelow(series, value);
+  const below = valueAt(series, place);
+  const above = valueAt(series, place + 1);
   return value / below <= above / value ? below : above;
 }
 
 /**
- * The value of a series so many steps up (or down, negative) from any value: one step up from 4.6 or
- * 4.7 in E12 is 5.6 only from 4.7, and 4.7 from 4.6.
+ * The value of a series so many steps up (or down, negative) from any value. The first step from
+ * between two members goes to the nearer side only: in E12 one up from 4.6 is 4.7, from 4.7 it is 5.6.
+ * No step (0) gives the member at or below. Results are exactly the decimal literal (4.7e-9).
  *
- * @throws NotchworkError `value-out-of-range` unless the value is above 0.
+ * @param steps whole number.
+ * @throws NotchworkError `value-out-of-range` unless value and result are from 1e-60 to 1e60.
  */
 export function next(value: number, series: SeriesName, steps: number): number {
-  assertPositive(value);
+  assertServed(value);
+  assertWhole('Number of steps', steps);
   const below = placeAtOrBelow(series, value);
-  const isMember = Math.abs(valueAt(series, below) / value - 1) <= 1e-9;
-  if (steps >= 0) return valueAt(series, below + steps);
-  return valueAt(series, below + steps + (isMember ? 0 : 1));
+  const isMember = Math.abs(valueAt(series, below) / value - 1) <= SAME;
+  const result = valueAt(series, below + steps + (steps < 0 && !isMember ? 1 : 0));
+  assertServed(result);
+  return result;
 }
 
 /**
  * A value's neighbours in a series, `count` on each side, itself in the middle even where it is not
- * a member; ascending.
+ * a member; ascending, `2·count + 1` values.
+ *
+ * @param count whole number from 0 to 1000.
+ * @throws NotchworkError `value-out-of-range` as {@link next} does.
  */
 export function neighbours(value: number, series: SeriesName, count: number): readonly number[] {
+  assertServed(value);
+  assertWhole('Number of neighbours', count);
+  assertRange('Number of neighbours', count, 0, 1000);
   const steps = Array.from({ length: count }, (_, index) => index + 1);
   return [
     ...steps.map((step) => next(value, series, -step)).reverse(),

@@ -18,18 +18,30 @@ export const AUDIO: Taper = { law: 'audio', midpoint: 0.15 };
 /** The audio taper turned round. */
 export const REVERSE_AUDIO: Taper = { law: 'reverse-audio', midpoint: 0.15 };
 
+/** Logarithm of `b`; written so that it stays finite down to the smallest midpoint a double can hold. */
+function logBase(midpoint: number): number {
+  return 2 * (Math.log1p(-midpoint) - Math.log(midpoint));
+}
+
+/** Below this the exponential is the straight line to the last digit of a double. */
+const STRAIGHT = 1e-9;
+/** Above this `b` would leave the doubles, and `1` is lost beside it. */
+const STEEP = 700;
+
 /** Exponential track through (0, 0), (½, midpoint) and (1, 1). */
 function audioRatio(turn: number, midpoint: number): number {
-  const base = ((1 - midpoint) / midpoint) ** 2;
-  if (Math.abs(base - 1) < 1e-9) return turn; // midpoint ½: the exponential becomes the straight line
-  return turn === 1 ? 1 : Math.expm1(turn * Math.log(base)) / (base - 1);
+  const log = logBase(midpoint);
+  if (turn === 0 || turn === 1 || Math.abs(log) < STRAIGHT) return turn;
+  if (log > STEEP) return Math.exp((turn - 1) * log);
+  return Math.expm1(turn * log) / Math.expm1(log);
 }
 
 /** The rotation at which {@link audioRatio} gives `ratio`. */
 function audioTurn(ratio: number, midpoint: number): number {
-  const base = ((1 - midpoint) / midpoint) ** 2;
-  if (Math.abs(base - 1) < 1e-9) return ratio;
-  return ratio === 1 ? 1 : Math.log1p(ratio * (base - 1)) / Math.log(base);
+  const log = logBase(midpoint);
+  if (ratio === 0 || ratio === 1 || Math.abs(log) < STRAIGHT) return ratio;
+  if (log > STEEP) return Math.max(0, 1 + Math.log(ratio) / log);
+  return Math.log1p(ratio * Math.expm1(log)) / log;
 }
 
 function assertMidpoint(taper: Taper): void {

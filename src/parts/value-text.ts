@@ -1,5 +1,7 @@
-import { NotchworkError } from '../errors.ts';
-import type { UnitSymbol } from '../units.ts';
+import { assertRange, NotchworkError } from '../errors.ts';
+import type { Ohms, UnitSymbol } from '../units.ts';
+import { decimalOf } from './decimal.ts';
+import { tidyPasted } from './pasted-text.ts';
 
 /** Limits that a value must keep; both ends belong to it. */
 export interface ValueRange {
@@ -7,109 +9,132 @@ export interface ValueRange {
   readonly max: number;
 }
 
-/** Decimal exponents of the prefixes people write on parts. */
+/** Decimal exponents of the prefixes people write on parts, as normalised (both micro signs are U+03BC). */
 const PREFIXES: Readonly<Record<string, number>> = {
-  f: -15,
   p: -12,
   n: -9,
   u: -6,
-  µ: -6,
   μ: -6,
   m: -3,
   k: 3,
   K: 3,
   M: 6,
-  meg: 6,
   G: 9,
-  R: 0,
 };
 
-/** Ways to write each unit, lower case. */
-const UNIT_NAMES: Readonly<Record<UnitSymbol, readonly string[]>> = {
-  Ω: ['ω', 'ohm', 'ohms'],
-  F: ['f', 'farad', 'farads'],
-  H: ['h', 'henry', 'henries'],
-  S: ['s', 'a/v'],
-  V: ['v', 'volt', 'volts'],
-  A: ['a', 'amp', 'amps'],
-  W: ['w', 'watt', 'watts'],
-  ratio: ['', '×', 'x'],
+/** What each unit is called: ways to write it (lower case), spoken words, and values to show as examples. */
+const UNITS: Readonly<
+  Record<
+    UnitSymbol,
+    {
+      readonly written: readonly string[];
+      readonly one: string;
+      readonly many: string;
+      readonly examples: string;
+    }
+  >
+> = {
+  Ω: { written: ['ω', 'ohm', 'ohms', 'r'], one: 'ohm', many: 'ohms', examples: '4k7, 4.7k or 1M' },
+  F: { written: ['f', 'farad', 'farads'], one: 'farad', many: 'farads', examples: '22n, 0.022u or 470p' },
+  H: { written: ['h', 'henry', 'henries'], one: 'henry', many: 'henries', examples: '10, 250m or 4H5' },
+  S: { written: ['s', 'a/v'], one: 'siemens', many: 'siemens', examples: '1.6m or 0.0016' },
+  V: { written: ['v', 'volt', 'volts'], one: 'volt', many: 'volts', examples: '300' },
+  A: { written: ['a', 'amp', 'amps'], one: 'ampere', many: 'amperes', examples: '1.2m' },
+  W: { written: ['w', 'watt', 'watts'], one: 'watt', many: 'watts', examples: '0.5' },
+  ratio: { written: ['×', 'x'], one: '', many: '', examples: '60 or 0.5' },
 };
 
-const EXAMPLES: Readonly<Record<UnitSymbol, string>> = {
-  Ω: '4k7, 4.7k or 1M',
-  F: '22n, 0.022u or 470p',
-  H: '10, 250m or 4H5',
-  S: '1.6m or 0.0016',
-  V: '300',
-  A: '1.2m',
-  W: '0.5',
-  ratio: '60 or 0.5',
-};
+/** Longest text worth reading or repeating in a message; a pasted page is neither. */
+const LONGEST = 40;
 
-function unreadable(text: string, unit: UnitSymbol, why: string): NotchworkError {
-  return new NotchworkError('value-unreadable', `“${text}” ${why} Write, for instance, ${EXAMPLES[unit]}.`);
+/** What is being read, for the messages. */
+interface Reading {
+  readonly text: string;
+  readonly unit: UnitSymbol;
+  readonly range: ValueRange | undefined;
 }
 
-/** Takes out what pasting brings along: spaces of every width, marks that cannot be seen, a real minus sign. */
-function tidy(text: string): string {
-  return text
-    .normalize('NFKC')
-    .replace(/[\u200b-\u200f\u2060\ufeff\u00ad]/g, '')
-    .replace(/\s+/g, '')
-    .replace(/[\u2212\u2013]/g, '-')
-    .replace(/\u2126/g, 'Ω');
+function describeRange({ min, max }: ValueRange, unit: UnitSymbol): string {
+  if (max === Number.POSITIVE_INFINITY) return `${formatValue(min, unit)} or more is accepted`;
+  return `${formatValue(min, unit)} to ${formatValue(max, unit)} is accepted`;
+}
+
+function unreadable({ text, unit, range }: Reading, why: string): NotchworkError {
+  const quoted = text.length > LONGEST ? `${text.slice(0, LONGEST)}…` : text;
+  const limits = range === undefined ? '' : ` ${describeRange(range, unit)}.`;
+  return new NotchworkError(
+    'value-unreadable',
+    `“${quoted}” ${why} Write, for instance, ${UNITS[unit].examples}.${limits}`,
+  );
 }
 
 function prefixExponent(prefix: string, unit: UnitSymbol): number | undefined {
   if (prefix === '') return 0;
-  if (/^meg$/i.test(prefix)) return 6;
-  if (unit === 'F' && prefix === 'U') return -6;
-  if (unit === 'F' && (prefix === 'N' || prefix === 'P')) return PREFIXES[prefix.toLowerCase()];
+  if (/^mega?$/i.test(prefix)) return 6;
+  if (unit === 'F' && /^[PNU]$/.test(prefix)) return PREFIXES[prefix.toLowerCase()];
   return Object.hasOwn(PREFIXES, prefix) ? PREFIXES[prefix] : undefined;
 }
 
-/** Splits what stands behind the number into a prefix and the unit; `undefined` where it is neither. */
-function exponentOfSuffix(suffix: string, unit: UnitSymbol): number | undefined {
-  for (const name of ['', ...UNIT_NAMES[unit]]) {
+/** What stands behind the number: a prefix, and whether the unit was written out. */
+interface Suffix {
+  readonly prefix: string;
+  readonly hasUnit: boolean;
+  readonly exponent: number;
+}
+
+function readSuffix(suffix: string, unit: UnitSymbol): Suffix | undefined {
+  for (const name of ['', ...UNITS[unit].written]) {
     if (!suffix.toLowerCase().endsWith(name)) continue;
-    const exponent = prefixExponent(suffix.slice(0, suffix.length - name.length), unit);
-    if (exponent !== undefined) return exponent;
+    const prefix = suffix.slice(0, suffix.length - name.length);
+    const exponent = prefixExponent(prefix, unit);
+    if (exponent !== undefined) return { prefix, hasUnit: name !== '', exponent };
   }
   return undefined;
 }
 
-/** A comma with three digits behind it may group thousands or mark decimals; nobody can know which. */
-const AMBIGUOUS_COMMA = /^[+-]?[1-9]\d{0,2},\d{3}(?!\d)/;
+/** Refuses prefixes that are read one way by the letter and were almost surely meant another. */
+function assertMeant({ prefix, hasUnit, exponent }: Suffix, reading: Reading): void {
+  const { unit } = reading;
+  if (exponent === 6 && unit !== 'Ω' && unit !== 'ratio') {
+    const instead = unit === 'F' ? 'for microfarads write u or µ' : 'for thousandths write a small m';
+    throw unreadable(reading, `would be mega${UNITS[unit].many}; ${instead}.`);
+  }
+  if (unit === 'Ω' && prefix === 'm' && !hasUnit) {
+    throw unreadable(reading, 'could be milliohms or megohms; write mΩ or M.');
+  }
+}
 
-/** Number, then what follows; or the prefix in the place of the decimal mark, as in 4k7. */
+/** Number, then what follows; or the prefix (or unit) in the place of the decimal mark, as in 4k7 and R47. */
 const PLAIN = /^([+-]?(?:\d+(?:[.,]\d*)?|[.,]\d+)(?:e[+-]?\d+)?)([^\d.,]*)$/i;
-const INFIX = /^([+-]?\d+)(meg|[a-zA-ZµμΩ])(\d+)([^\d.,]*)$/i;
+const INFIX = /^([+-]?\d*)(meg|[a-zμω])(\d+)([^\d.,]*)$/iu;
 
-function readNumber(tidied: string, text: string, unit: UnitSymbol): number {
-  if (AMBIGUOUS_COMMA.test(tidied)) {
-    const [whole, rest] = tidied.split(',');
+/** A comma with three digits behind it may group thousands or mark decimals; nobody can know which. */
+const AMBIGUOUS_COMMA = /^([+-]?[1-9]\d{0,2}),(\d{3}(?!\d).*)$/;
+
+function readNumber(tidied: string, reading: Reading): number {
+  if (/[.,].*[.,]/.test(tidied)) throw unreadable(reading, 'has more than one decimal mark.');
+  const comma = AMBIGUOUS_COMMA.exec(tidied);
+  if (comma) {
+    const [, whole, rest] = comma;
     throw unreadable(
-      text,
-      unit,
+      reading,
       `could mean ${whole}${rest} or ${whole}.${rest}: a comma with three digits behind it is not guessed.`,
     );
   }
+  const { unit } = reading;
   const plain = PLAIN.exec(tidied);
-  if (plain) {
-    const exponent = exponentOfSuffix(plain[2]!, unit);
-    if (exponent !== undefined) return scaledNumber(plain[1]!.replace(',', '.'), exponent);
+  const suffix = plain ? readSuffix(plain[2]!, unit) : undefined;
+  if (plain && suffix) {
+    assertMeant(suffix, reading);
+    return scaledNumber(plain[1]!.replace(',', '.'), suffix.exponent);
   }
   const infix = INFIX.exec(tidied);
-  if (infix) {
-    const [, whole, mark, fraction, rest] = infix;
-    const isUnit = UNIT_NAMES[unit].includes(mark!.toLowerCase());
-    const exponent = isUnit ? 0 : prefixExponent(mark!, unit);
-    if (exponent !== undefined && exponentOfSuffix(rest!, unit) === 0) {
-      return scaledNumber(`${whole}.${fraction}`, exponent);
-    }
+  const mark = infix ? readSuffix(infix[2]!, unit) : undefined;
+  if (infix && mark && readSuffix(infix[4]!, unit)?.prefix === '') {
+    assertMeant({ ...mark, hasUnit: mark.hasUnit || infix[4] !== '' }, reading);
+    return scaledNumber(`${infix[1]}.${infix[3]}`, mark.exponent);
   }
-  throw unreadable(text, unit, `is not a value in ${unit === 'ratio' ? 'plain numbers' : unit}.`);
+  throw unreadable(reading, `is not a value in ${unit === 'ratio' ? 'plain numbers' : unit}.`);
 }
 
 /** Scales by a power of ten in the decimal literal, so that 22n is exactly 2.2e-8. */
@@ -119,38 +144,42 @@ function scaledNumber(literal: string, exponent: number): number {
 }
 
 /**
- * Reads a part's value as people write it: `22n`, `0.022u`, `22 nF`, `4k7`, `4.7k`, `1M`, `1Meg`,
- * `470p`, `1e-9`; both micro signs; comma or point as decimal mark; spaces anywhere.
+ * Reads a part's value as people write it: `22n`, `0.022u`, `22 nF`, `4k7`, `R47`, `4.7k`, `1M`,
+ * `1Meg`, `470p`, `1e-9`, `1 000 000`; both micro signs; comma or point as decimal mark; a leading
+ * plus; whatever invisible marks pasting brings along. Capital P, N, U are taken for p, n, µ in farads.
  *
- * Not guessed: a bare number of picofarads or a printed code such as `223` in a field for capacitors
- * (it could be 223 pF, or the code for 22 nF), a capital M in front of farads, and a comma with three
- * digits behind it.
+ * Refused rather than guessed, with the reason: three or more bare figures in a field for capacitors
+ * (223 could be 223 pF, or the printed code for 22 nF; in ohms it is 223 Ω); mega with any unit but
+ * ohms; a bare `m` in ohms; one comma with three digits behind it (1,000); raised figures (10²).
  *
- * @param range what is accepted; the message says so where the value lies outside.
+ * @param range what is accepted; every message then says so.
+ * @returns the value in the unit, to the last bit what its decimal literal means; zero and negative
+ * values too, unless the range forbids them.
  * @throws NotchworkError `value-unreadable` or `value-out-of-range`, saying what is accepted.
+ * @example parseValue('4k7', 'Ω') // 4700
  */
 export function parseValue(text: string, unit: UnitSymbol, range?: ValueRange): number {
-  const tidied = tidy(text);
-  if (tidied === '') throw unreadable(text, unit, 'is empty.');
-  if (unit === 'F' && /^\d{3,}$/.test(tidied)) {
+  const reading: Reading = { text: text.trim(), unit, range };
+  const tidy = tidyPasted(text);
+  if (!tidy.ok) throw unreadable(reading, tidy.why);
+  if (tidy.text === '') throw unreadable({ ...reading, text: '' }, 'is empty.');
+  if (tidy.text.length > LONGEST) throw unreadable(reading, 'is too long for a value.');
+  if (unit === 'F' && /^\d{3,}$/.test(tidy.text)) {
     throw unreadable(
-      text,
-      unit,
+      reading,
       'is not guessed: it could be picofarads, or the code printed on a capacitor (223 is 22 nF).',
     );
   }
-  if (unit === 'F' && /M(F|farads?)?$/.test(tidied) && !/meg/i.test(tidied)) {
-    throw unreadable(text, unit, 'would be megafarads; for microfarads write u or µ.');
-  }
-  const value = readNumber(tidied, text, unit);
-  if (!Number.isFinite(value)) throw unreadable(text, unit, 'is beyond every number.');
+  const value = readNumber(tidy.text, reading);
+  if (!Number.isFinite(value)) throw unreadable(reading, 'is beyond every number.');
   if (range !== undefined && !(value >= range.min && value <= range.max)) {
+    const hint = unit === 'F' && /^[\d.,]+$/.test(tidy.text) ? ' Without p, n or µ it is whole farads.' : '';
     throw new NotchworkError(
       'value-out-of-range',
-      `${formatValue(value, unit)} is out of range: ${formatValue(range.min, unit)} to ${formatValue(range.max, unit)} is accepted.`,
+      `${formatValue(value, unit)} is out of range: ${describeRange(range, unit)}.${hint}`,
     );
   }
-  return value;
+  return value + 0; // turns −0, which nobody means, into 0
 }
 
 const SIGNS: readonly { readonly exponent: number; readonly sign: string; readonly spoken: string }[] = [
@@ -159,65 +188,96 @@ const SIGNS: readonly { readonly exponent: number; readonly sign: string; readon
   { exponent: 3, sign: 'k', spoken: 'kilo' },
   { exponent: 0, sign: '', spoken: '' },
   { exponent: -3, sign: 'm', spoken: 'milli' },
-  { exponent: -6, sign: 'µ', spoken: 'micro' },
+  { exponent: -6, sign: '\u00b5', spoken: 'micro' },
   { exponent: -9, sign: 'n', spoken: 'nano' },
   { exponent: -12, sign: 'p', spoken: 'pico' },
 ];
 
-const SPOKEN_UNITS: Readonly<Record<UnitSymbol, string>> = {
-  Ω: 'ohms',
-  F: 'farads',
-  H: 'henries',
-  S: 'siemens',
-  V: 'volts',
-  A: 'amperes',
-  W: 'watts',
-  ratio: '',
-};
+const NO_PREFIX = SIGNS.find(({ exponent }) => exponent === 0)!;
 
-/** Significant digits shown; a value that needs more is rounded for the eye only. */
+/** Digits that somebody may have typed; a value with more comes from a calculation. */
+const TYPED_DIGITS = 9;
+/** Digits shown of a calculated value. */
 const SHOWN_DIGITS = 4;
 
 interface Scaled {
-  readonly digits: string;
+  /** The number in front of the prefix, with a plain hyphen as minus. */
+  readonly number: string;
   readonly prefix: (typeof SIGNS)[number];
 }
 
-/** A number between 1 and 999.9 with the prefix that makes it so; farads have no milli (0.0047 F is 4700 µF). */
-function scale(value: number, unit: UnitSymbol, digits: number): Scaled {
-  const usable = SIGNS.filter(({ exponent }) =>
-    unit === 'ratio' ? exponent === 0 : !(unit === 'F' && exponent === -3),
-  );
-  const rounded = Number(value.toPrecision(digits));
-  const size = Math.abs(rounded);
-  const prefix =
-    size === 0
-      ? SIGNS.find(({ exponent }) => exponent === 0)!
-      : (usable.find(({ exponent }) => size >= Number(`1e${exponent}`)) ?? usable.at(-1)!);
-  const shown = rounded / 10 ** prefix.exponent;
-  return { digits: String(Number(shown.toPrecision(digits))), prefix };
+function rounded(value: number, digits: number | undefined): number {
+  if (digits !== undefined) return Number(value.toPrecision(digits));
+  const typed = Number(value.toPrecision(TYPED_DIGITS));
+  return typed === value ? value : Number(value.toPrecision(SHOWN_DIGITS));
 }
 
-/** A value as it is printed: "390 pF", "4.7 kΩ", "60"; a narrow no-break space between, a real minus sign. */
-export function formatValue(value: number, unit: UnitSymbol, digits = SHOWN_DIGITS): string {
-  const { digits: shown, prefix } = scale(value, unit, digits);
-  const number = shown.replace('-', '\u2212');
-  return unit === 'ratio' ? number : `${number}\u202f${prefix.sign}${unit}`;
+/** Prefixes used for a unit: none for ratios; farads have no milli and up (0.0047 F is 4700 µF). */
+function isUsable(exponent: number, unit: UnitSymbol): boolean {
+  if (unit === 'ratio') return exponent === 0;
+  return unit !== 'F' || (exponent !== -3 && exponent <= 0);
 }
 
-/** A resistance as short as it gets, for the readout under a knob: "150k", "12k5", "0". */
-export function formatShort(value: number): string {
-  const { digits, prefix } = scale(value, 'Ω', 3);
-  return prefix.sign !== '' && digits.includes('.')
-    ? digits.replace('.', prefix.sign)
-    : `${digits}${prefix.sign}`;
+/** A number between 1 and 999.9 with the prefix that makes it so, the point moved in the digits themselves. */
+function scale(value: number, unit: UnitSymbol, digits?: number): Scaled {
+  if (digits !== undefined) assertRange('Number of digits', digits, 1, 15);
+  if (Number.isNaN(value)) return { number: 'unknown', prefix: NO_PREFIX };
+  const minus = value < 0 ? '-' : '';
+  const size = rounded(Math.abs(value), digits);
+  if (size === 0) return { number: '0', prefix: NO_PREFIX };
+  if (size === Number.POSITIVE_INFINITY) return { number: `${minus}∞`, prefix: NO_PREFIX };
+  const { digits: figures, exponent } = decimalOf(size);
+  if (exponent >= 12 || exponent < -15) {
+    return { number: `${minus}${String(size).replace('e+', 'e')}`, prefix: NO_PREFIX };
+  }
+  const usable = SIGNS.filter((prefix) => isUsable(prefix.exponent, unit));
+  const prefix = usable.find((entry) => exponent >= entry.exponent) ?? usable.at(-1)!;
+  const whole = exponent - prefix.exponent + 1;
+  const padded = whole > 0 ? figures.padEnd(whole, '0') : '0'.repeat(1 - whole) + figures;
+  const point = Math.max(whole, 1);
+  const fraction = padded.slice(point);
+  return { number: `${minus}${padded.slice(0, point)}${fraction === '' ? '' : `.${fraction}`}`, prefix };
 }
 
-/** A value in words, for reading aloud: "390 picofarads". */
+/**
+ * A value as it is printed: "390 pF", "4.7 kΩ", "60"; a narrow no-break space (U+202F) between, the
+ * micro sign U+00B5, a real minus sign (U+2212).
+ *
+ * Without `digits`, a value of up to nine significant digits (whatever somebody typed) is written
+ * whole, so that reading it again gives the same number; a longer one comes from a calculation and is
+ * rounded to four. Special cases: "∞ Ω"; NaN is "unknown Ω"; from 1e12 up and below 1e-15 the
+ * exponent is written out ("1e30 F").
+ *
+ * @param options.digits significant digits to round to instead, 1 to 15.
+ * @throws NotchworkError `value-out-of-range` for another number of digits.
+ */
+export function formatValue(
+  value: number,
+  unit: UnitSymbol,
+  options: { readonly digits?: number } = {},
+): string {
+  const { number, prefix } = scale(value, unit, options.digits);
+  const shown = number.replace(/^-/, '\u2212');
+  return unit === 'ratio' ? shown : `${shown}\u202f${prefix.sign}${unit}`;
+}
+
+/**
+ * A resistance as short as it gets, for the readout under a knob, to three digits: "150k", "12k5",
+ * "820", "0". Below 1 Ω to hundredths ("0.47").
+ */
+export function formatShort(value: Ohms): string {
+  if (Math.abs(value) < 1) return String(Number(value.toFixed(2)) + 0);
+  const { number, prefix } = scale(value, 'Ω', 3);
+  const shown = number.replace(/^-/, '\u2212');
+  return prefix.sign !== '' && shown.includes('.')
+    ? shown.replace('.', prefix.sign)
+    : `${shown}${prefix.sign}`;
+}
+
+/** A value in words, for reading aloud: "390 picofarads", "1 megohm", "minus 5 volts"; digits as in {@link formatValue}. */
 export function speakValue(value: number, unit: UnitSymbol): string {
-  const { digits, prefix } = scale(value, unit, SHOWN_DIGITS);
-  return `${digits} ${prefix.spoken}${SPOKEN_UNITS[unit]}`
-    .trim()
-    .replace('kiloohms', 'kilohms')
-    .replace('megaohms', 'megohms');
+  const { number, prefix } = scale(value, unit);
+  const amount = number.replace(/^-/, 'minus ').replace('∞', 'infinite');
+  const name = `${prefix.spoken}${number === '1' ? UNITS[unit].one : UNITS[unit].many}`;
+  return `${amount} ${name.replace(/^(kil|meg)[oa](?=ohm)/, '$1')}`.trimEnd();
 }
