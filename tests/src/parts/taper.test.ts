@@ -107,6 +107,8 @@ describe('taper', () => {
           expect(back({ law, midpoint }, turn)).toBeGreaterThanOrEqual(0);
           expect(back({ law, midpoint }, turn)).toBeLessThanOrEqual(1);
         }
+        const ends = [at({ law, midpoint }, 0), at({ law, midpoint }, 1)];
+        expect([...ends, back({ law, midpoint }, 0), back({ law, midpoint }, 1)]).toEqual([0, 1, 0, 1]);
         expect(at({ law, midpoint }, rotation(0.5))).toBeCloseTo(
           law === 'audio' ? midpoint : 1 - midpoint,
           12,
