@@ -1,14 +1,12 @@
 import type { Clip } from '../clip/clip.ts';
-import { impulseTail } from '../filter/impulse-tail.ts';
-import { type DigitalSection, isSilent } from '../filter/section.ts';
+import { renderTail } from '../filter/render-tail.ts';
+import type { DigitalSection } from '../filter/section.ts';
 import { amplitude, type Decibels } from '../units.ts';
 import type { RenderQuestion } from './render.worker.ts';
 import { checkSections } from './section-nodes.ts';
 import { WorkerPort } from './worker-port.ts';
 
 const BLOCK = 1 << 17; // frames: some 10 ms of work, so that progress and cancelling are prompt
-const TAIL_FLOOR = 1e-5; // 100 dB below what rang: under the noise of any recording
-const LONGEST_TAIL = 2; // s
 
 /** Choices for {@link renderOffline}. */
 export interface RenderOptions {
@@ -19,12 +17,6 @@ export interface RenderOptions {
   readonly signal?: AbortSignal;
   /** Called with the share that is done, 0 to 1, in order; the last call is 1. */
   readonly onProgress?: (share: number) => void;
-}
-
-function tailFrames(sections: readonly DigitalSection[], clip: Clip): number {
-  if (sections.length === 0 || isSilent(sections)) return 0;
-  const ringing = impulseTail(sections, clip.sampleRate, TAIL_FLOOR);
-  return Math.min(ringing, Math.round(LONGEST_TAIL * clip.sampleRate));
 }
 
 /** A block of the clip, followed by silence beyond its end. */
@@ -51,7 +43,7 @@ export async function renderOffline(
 ): Promise<Clip> {
   signal?.throwIfAborted();
   checkSections(sections);
-  const frames = clip.frames + (tail ? tailFrames(sections, clip) : 0);
+  const frames = clip.frames + (tail ? renderTail(sections, clip.sampleRate) : 0);
   const channels = clip.channels.map(() => new Float32Array(frames));
   const worker = new Worker(new URL('./render.worker.ts', import.meta.url), { type: 'module' });
   const port = new WorkerPort(worker, signal);
