@@ -99,7 +99,7 @@ describe('taper', () => {
   });
 
   it('stays a number at midpoints that only a damaged file has', () => {
-    for (const midpoint of [5e-324, 1e-200, 1e-150, 1e-10, 1 - 1e-15]) {
+    for (const midpoint of [5e-324, 1e-200, 1e-155, 1e-150, 1e-10, 1 - 1e-15]) {
       for (const law of ['audio', 'reverse-audio'] as const) {
         for (const turn of [0, 1e-12, 0.5, 1 - 1e-12, 1]) {
           expect(at({ law, midpoint }, turn)).toBeGreaterThanOrEqual(0);
