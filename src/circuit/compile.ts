@@ -11,7 +11,7 @@ export const MOST_NODES = 60;
 export const MOST_ELEMENTS = 150;
 
 /** Partial sums that are compiled at the most: a few hundred milliseconds of work. */
-const DEFAULT_LIMITS: DiagramLimits = { steps: 60_000 };
+export const DEFAULT_LIMITS: DiagramLimits = { steps: 60_000 };
 
 function countTrees(diagram: Diagram): number {
   const counts: number[] = [];
