@@ -190,7 +190,7 @@ export function parseNetlist(text: string): SpiceNetlist {
   const [first, ...rest] = lines;
   let goesOn = true;
   if (first!.kind === 'comment') reader.title = first!.text.trim().replace(/^\*+\s*/, '');
-  else if (reader.isTitle(first!)) reader.title = first!.text.trim();
+  else if (reader.isTitle(first!)) reader.title = first!.kind === 'blank' ? '' : first!.text.trim();
   else goesOn = reader.take(first!);
   for (const line of rest) {
     if (!goesOn) break;

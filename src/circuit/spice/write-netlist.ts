@@ -2,6 +2,7 @@ import { NotchworkError } from '../../errors.ts';
 import type { Taper } from '../../parts/taper.ts';
 import { type ElementKind, GROUND, type NodeName, type NodePair } from '../wiring.ts';
 import { writeLabelComment } from './label-comment.ts';
+import { plainText } from './plain-text.ts';
 
 /** SPICE takes no resistor of 0 Ω; this one is as good as none, in ohms. */
 export const LEAST_RESISTANCE = 1e-6;
@@ -70,11 +71,6 @@ class Namer {
   }
 }
 
-function oneLine(text: string): string {
-  // biome-ignore lint/suspicious/noControlCharactersInRegex: control characters are what must not get through
-  return text.replace(/[\u0000-\u001f\u007f\u2028\u2029]+/g, ' ').trim();
-}
-
 /** The shortest digits that give the same double again: up to 17 of them. */
 function numberText(owner: string, value: number): string {
   if (Number.isFinite(value)) return String(value + 0);
@@ -121,7 +117,7 @@ function cardLines(
     const { text, raised } = valueText(element);
     anyRaised ||= raised;
     const nodes = [...element.nodes, ...(element.control ?? [])].map(nodeOf);
-    const comment = writeLabelComment(element.label === undefined ? {} : { label: oneLine(element.label) });
+    const comment = writeLabelComment(element.label === undefined ? {} : { label: plainText(element.label) });
     const card = [namer.name(String(index), wish), ...nodes, text].join(' ');
     return comment === undefined ? [card] : [comment, card];
   });
@@ -137,7 +133,7 @@ function paramLines(params: readonly WrittenParam[]): string[] {
       );
     }
     const comment = writeLabelComment({
-      ...(label !== undefined && { label: oneLine(label) }),
+      ...(label !== undefined && { label: plainText(label) }),
       ...(taper !== undefined && { taper }),
     });
     const line = `.param ${name}=${numberText(name, value)}`;
@@ -148,7 +144,7 @@ function paramLines(params: readonly WrittenParam[]): string[] {
 /**
  * A netlist as text that an unmodified SPICE program runs, and that `parseNetlist` reads back:
  * values with all their digits, the output node named `out`, the source's `in`, an AC analysis from
- * 10 Hz to 40 kHz. A resistor below {@link LEAST_RESISTANCE} is written as that, and one given as an
+ * 10 Hz to 40 kHz. All text is plain ASCII (see `plain-text.ts`). A resistor below {@link LEAST_RESISTANCE} is written as that, and one given as an
  * expression has it added; the file then says so.
  *
  * @throws NotchworkError `value-out-of-range` for a value that is not finite or a parameter's name
@@ -165,8 +161,8 @@ export function writeNetlist(netlist: WrittenNetlist): string {
     );
   }
   return [
-    `* ${oneLine(netlist.title) || 'Circuit'}`,
-    ...remarks.map((remark) => `* ${oneLine(remark)}`),
+    `* ${plainText(netlist.title) || 'Circuit'}`,
+    ...remarks.map((remark) => `* ${plainText(remark)}`),
     ...paramLines(netlist.params ?? []),
     source,
     ...cards.lines,
