@@ -62,7 +62,7 @@ export const powerFeedback: Block = {
       unit: 'Ω',
       fallback: 8,
       range: [0.1, 1e6],
-      help: 'The loudspeaker as a plain resistance.',
+      help: 'The loudspeaker as a plain resistance. Raise it and the stage has more gain, and so more feedback.',
     },
     feedbackResistor: {
       label: 'Feedback resistor',

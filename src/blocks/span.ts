@@ -177,7 +177,8 @@ function referenceOf(span: Span, index: number, reference: Readonly<Record<strin
       : entry.settings,
   );
   const before = index === 0 ? 1 : magnitudeAt(transferAt(span, index - 1, settings), omega);
-  return magnitudeAt(transferAt(span, index, settings), omega) / before;
+  const own = magnitudeAt(transferAt(span, index, settings), omega) / before;
+  return own > 0 ? own : 1; // a block that passes nothing stays silent
 }
 
 /** What a span does, for its present values. */
