@@ -1,64 +1,59 @@
-import { type ResultType, Simulation } from 'eecircuit-engine';
+import { Simulation } from 'eecircuit-engine';
+import type { Wiring } from '../../src/circuit/wiring.ts';
 
-/** What a SPICE program finds at one node, for a source of 1 V and phase 0. */
-export interface AcRun {
+/** What a SPICE engine says of one node against frequency. */
+export interface SpiceResponse {
   readonly frequencies: readonly number[];
-  /** Level in dB. */
-  readonly levels: readonly number[];
-  /** Phase in degrees, −180 to 180. */
-  readonly phases: readonly number[];
+  readonly re: readonly number[];
+  readonly im: readonly number[];
 }
 
-/** The sweep: SPICE's own logarithmic grid. */
-export interface AcSweep {
-  readonly from: number;
-  readonly to: number;
-  readonly perDecade: number;
+/** SPICE takes no resistor of 0 Ω; a milliohm is as good as none next to kilohms. */
+const SHORT = 1e-3;
+
+/** A wiring with its values as the text of a SPICE netlist; numbers with all their digits. */
+export function spiceText(wiring: Wiring, values: ArrayLike<number>, sweep: string): string {
+  const lines = wiring.elements.map((element, index) => {
+    const value = values[index]!;
+    const nodes = [...element.nodes, ...('control' in element ? element.control : [])].map(plainNode).join(' ');
+    const letter = { resistor: 'R', capacitor: 'C', inductor: 'L', transconductance: 'G', 'voltage-gain': 'E' }[element.kind];
+    const written = element.kind === 'resistor' ? Math.max(value, SHORT) : value;
+    return `${letter}${index} ${nodes} ${written.toExponential(16)}`;
+  });
+  const source = wiring.source.map(plainNode).join(' ');
+  return ['check', `Vin ${source} DC 0 AC 1`, ...lines, sweep, '.end'].join('\n');
 }
 
-let starting: Promise<Simulation> | undefined;
+/** Node names that every SPICE takes. */
+export function plainNode(name: string): string {
+  return name === '0' ? '0' : `n_${name.replace(/[^a-z0-9]/gi, '_').toLowerCase()}`;
+}
+
+let simulation: Promise<Simulation> | undefined;
 
 async function started(): Promise<Simulation> {
-  const simulation = new Simulation();
-  await simulation.start();
+  simulation ??= (async () => {
+    const fresh = new Simulation();
+    await fresh.start();
+    return fresh;
+  })();
   return simulation;
 }
 
-/** The netlist with its own analysis and print lines replaced by the sweep asked for. */
-function withSweep(netlist: string, { from, to, perDecade }: AcSweep): string {
-  const kept = netlist.split('\n').filter((line) => !/^\s*\.(ac|print|end)\b/i.test(line));
-  // A linear circuit needs no operating point, and inductors in a ring have none that SPICE can find.
-  return [...kept, '.options noopac', `.ac dec ${perDecade} ${from} ${to}`, '.end', ''].join('\n');
-}
-
-/** One node's voltage out of a run, by its lower-case name. */
-function read(result: ResultType, node: string): AcRun {
-  if (result.dataType !== 'complex') throw new Error(`the run gave ${result.dataType} data`);
-  const column = (name: string) => {
-    const found = result.data.find((entry) => entry.name.toLowerCase() === name);
-    if (found === undefined) throw new Error(`no ${name}; there are ${result.variableNames.join(', ')}`);
-    return found.values;
-  };
-  const voltages = column(`v(${node})`);
+/** Runs a netlist in `eecircuit-engine`, a SPICE engine from the npm registry, and reads one voltage. */
+export async function runSpice(text: string, node: string): Promise<SpiceResponse> {
+  const engine = await started();
+  engine.setNetList(text);
+  const result = await engine.runSim();
+  if (result.dataType !== 'complex') throw new Error(`the engine gave no AC result: ${text}`);
+  const frequency = result.data.find((entry) => entry.type === 'frequency');
+  const voltage = result.data.find((entry) => entry.name.toLowerCase() === `v(${plainNode(node)})`);
+  if (frequency === undefined || voltage === undefined) {
+    throw new Error(`the engine does not know ${node}: ${result.variableNames.join(', ')}`);
+  }
   return {
-    frequencies: column('frequency').map((value) => value.real),
-    levels: voltages.map(({ real, img }) => 20 * Math.log10(Math.hypot(real, img))),
-    phases: voltages.map(({ real, img }) => (Math.atan2(img, real) * 180) / Math.PI),
+    frequencies: frequency.values.map((value) => value.real),
+    re: voltage.values.map((value) => value.real),
+    im: voltage.values.map((value) => value.img),
   };
-}
-
-/**
- * Runs a netlist in a SPICE engine compiled to WebAssembly (npm `eecircuit-engine`), another program
- * by other people, and reads the AC voltage of one node. The engine starts once, in half a second.
- *
- * @throws Error with the engine's own messages where it refuses the netlist.
- */
-export async function runAc(netlist: string, node: string, sweep: AcSweep): Promise<AcRun> {
-  starting ??= started();
-  const simulation = await starting;
-  simulation.setNetList(withSweep(netlist, sweep));
-  const result = await simulation.runSim();
-  const problems = simulation.getError();
-  if (problems.length > 0) throw new Error(problems.join('\n'));
-  return read(result, node.toLowerCase());
 }

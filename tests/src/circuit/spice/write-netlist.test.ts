@@ -9,7 +9,7 @@ import {
   writeNetlist,
 } from '../../../../src/circuit/spice/write-netlist.ts';
 import { seededRandom } from '../../../../src/study/blind-trial.ts';
-import { runAc } from '../../../reference/spice-engine.ts';
+import { runAc } from '../../../reference/netlist-run.ts';
 import { randomCircuit } from '../random-wiring.ts';
 
 const resistor = (name: string, a: string, b: string, value: number | string): WrittenElement => ({
