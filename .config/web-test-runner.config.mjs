@@ -21,6 +21,13 @@ export default {
   testFramework: { config: { ui: 'bdd', timeout: '20000' } },
   browsers: [
     chromeLauncher({
+      // Two pages run side by side; without it the one behind gets no frames.
+      createPage: async ({ context }) => {
+        const page = await context.newPage();
+        const session = await page.createCDPSession();
+        await session.send('Emulation.setFocusEmulationEnabled', { enabled: true });
+        return page;
+      },
       launchOptions: {
         executablePath: await ensureChromium(),
         args: [

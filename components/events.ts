@@ -1,6 +1,7 @@
 import type { ContextRate, PlotView, ThemeChoice } from '../src/bench/preferences.ts';
 import type { SlotName } from '../src/blocks/block.ts';
 import type { VoicingLetter } from '../src/design/design.ts';
+import type { SeriesName } from '../src/parts/series.ts';
 import type { Taper } from '../src/parts/taper.ts';
 import type { Hertz, Rotation, Seconds } from '../src/units.ts';
 
@@ -21,6 +22,7 @@ export interface BenchEvents {
   'nw-taper-set': CustomEvent<{ readonly slot: SlotName; readonly knob: string; readonly taper: Taper }>;
   'nw-present-set': CustomEvent<{ readonly slot: SlotName; readonly present: boolean }>;
   'nw-variant-set': CustomEvent<{ readonly slot: SlotName; readonly variant: string }>;
+  'nw-series-set': CustomEvent<{ readonly series: SeriesName }>;
   'nw-drawer-open': CustomEvent<{ readonly slot: SlotName }>;
   'nw-play-toggle': CustomEvent<undefined>;
   'nw-seek': CustomEvent<{ readonly seconds: Seconds }>;

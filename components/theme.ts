@@ -17,6 +17,8 @@ const light = css`
   --nw-on-accent: #ffffff;
   --nw-caution: #9a3412;
   --nw-wave: #9aa4ad;
+  --nw-shadow: rgb(24 33 43 / 18%);
+  --nw-veil: rgb(24 33 43 / 35%);
   --nw-curve-a: #0072b2;
   --nw-curve-b: #c44f00;
   --nw-curve-c: #00805d;
@@ -41,6 +43,8 @@ const dark = css`
   --nw-on-accent: #10151b;
   --nw-caution: #fdba74;
   --nw-wave: #5d6b78;
+  --nw-shadow: rgb(0 0 0 / 45%);
+  --nw-veil: rgb(0 0 0 / 55%);
   --nw-curve-a: #56b4e9;
   --nw-curve-b: #f0903c;
   --nw-curve-c: #3fc79b;

@@ -1,6 +1,6 @@
 import { signal } from '@preact/signals-core';
 import { html, LitElement, nothing, type TemplateResult } from 'lit';
-import { customElement, property, state } from 'lit/decorators.js';
+import { customElement, state } from 'lit/decorators.js';
 import { DEMO_CLIPS } from '../../demo-audio/clips.ts';
 import { type Bench, createBench } from '../../src/bench/bench.ts';
 import type { ExportKind, RenderProgress } from '../../src/bench/bench-exports.ts';
@@ -67,8 +67,8 @@ const REFERENCE = {
 export class NwApp extends LitElement {
   static override styles = [baseStyles, appStyles];
 
-  /** The bench on this page. */
-  @property({ attribute: false }) bench: Bench = createBench();
+  /** The bench on this page; it lives as long as the element. */
+  readonly bench: Bench = createBench();
 
   @state() private tab = 'listen';
 

@@ -9,7 +9,7 @@ export const figuresStyles = css`
   dl {
     margin: 0;
     display: grid;
-    gap: 12px 16px;
+    gap: 8px 16px;
     grid-template-columns: repeat(auto-fill, minmax(112px, 1fr));
   }
   dt,
@@ -20,7 +20,7 @@ export const figuresStyles = css`
   dd {
     margin: 0;
     font-weight: 620;
-    font-size: 18px;
+    font-size: 17px;
     line-height: 1.25;
   }
   dd .note {
@@ -30,6 +30,8 @@ export const figuresStyles = css`
     color: var(--nw-ink-soft);
   }
   .reference {
-    margin: 12px 0 0;
+    margin: 8px 0 0;
+    font-size: 12px;
+    line-height: 1.3;
   }
 `;

@@ -4,8 +4,9 @@ import { css } from 'lit';
 export const knobStyles = css`
   :host {
     display: inline-grid;
+    align-content: start;
     justify-items: center;
-    min-width: 108px;
+    min-width: 88px;
     text-align: center;
   }
   .label {
@@ -76,5 +77,11 @@ export const knobStyles = css`
     color: var(--nw-ink-soft);
     font-size: 13px;
     min-height: 1.4em;
+  }
+  .entry[aria-invalid='true'] {
+    border-color: var(--nw-caution);
+  }
+  .refused {
+    color: var(--nw-caution);
   }
 `;

@@ -10,6 +10,10 @@ const PAGE_STEPS = 10;
 /** Pixels of vertical drag for the whole range, coarse and with Shift. */
 const DRAG_TRAVEL = 180;
 const FINE_DRAG_TRAVEL = 900;
+/** Pixels of scrolling for one step: a notch of a wheel has more, a touchpad sends many small ones. */
+const WHEEL_TRAVEL = 30;
+/** Milliseconds without scrolling after which it is taken to be over; the wheel has no end of its own. */
+const WHEEL_REST = 250;
 /** The arc spans 270 degrees, from lower left to lower right. */
 const SWEEP = 270;
 const TICKS = 11;
@@ -31,7 +35,8 @@ function arc(from: number, to: number, radius: number): string {
  * A control to turn: an arc from 0 to 10, its position in figures, and under it what the position is.
  *
  * Drag up or down (Shift: fine), arrow keys one step, Page keys ten, Home and End, the wheel while
- * focused; a double click or Delete returns to the default; typing a number sets it.
+ * focused; a double click or Delete returns to the default; typing a number (of 10, or with a per
+ * cent sign) sets it. Escape or a cancelled pointer puts it back to where the drag began.
  *
  * @fires input - while it is being turned; read `position`
  * @fires change - when it has settled; read `position`
@@ -49,6 +54,9 @@ export class NwKnob extends LitElement {
   /** Text being typed, or undefined while nothing is. */
   @state() private typed: string | undefined;
 
+  /** Whether what was typed is no position. */
+  @state() private refused = false;
+
   /** Name above the dial. */
   @property() label = '';
 
@@ -61,17 +69,21 @@ export class NwKnob extends LitElement {
   /** What the position is, under the dial: "150k · 100k". */
   @property() readout = '';
 
-  /** The same in words, read after the position: "150 kilohms and 100 kilohms". */
+  /** The same in words; the position in per cent is read after it: "47 kilohms, 60 %". */
   @property() spoken = '';
 
   #drag: { readonly pointer: number; readonly y: number; readonly start: number } | undefined;
   #reference = { y: 0, position: 0 };
-  #wheelSettles: ReturnType<typeof setTimeout> | undefined;
+  #scrolled = 0;
+  #scrollRests: ReturnType<typeof setTimeout> | undefined;
+  /** Whether `input` was told since the last `change`. */
+  #unsettled = false;
 
   override disconnectedCallback(): void {
     super.disconnectedCallback();
-    this.#settleWheel();
     this.#drag = undefined;
+    this.typed = undefined;
+    this.#settle();
   }
 
   override updated(changed: PropertyValues): void {
@@ -82,22 +94,36 @@ export class NwKnob extends LitElement {
     this.dispatchEvent(new Event(type, { bubbles: true, composed: true }));
   }
 
-  /** Moves by the user's hand; true where the position changed. */
-  #moveTo(position: number): boolean {
+  /** Moves by the user's hand. */
+  #moveTo(position: number): void {
     const next = Math.min(Math.max(position, 0), 1);
-    if (next === this.position || Number.isNaN(next)) return false;
+    if (next === this.position) return;
     this.position = next;
+    this.#unsettled = true;
     this.#tell('input');
-    return true;
+  }
+
+  #moveBySteps(steps: number, fine: boolean): void {
+    const position = this.position + steps * (fine ? FINE_STEP : STEP);
+    this.#moveTo(Math.round(position * 1e6) / 1e6); // no 0.5700000000000001
+  }
+
+  #settle(): void {
+    clearTimeout(this.#scrollRests);
+    if (!this.#unsettled) return;
+    this.#unsettled = false;
+    this.#tell('change');
   }
 
   #set(position: number): void {
-    if (this.#moveTo(position)) this.#tell('change');
+    this.#moveTo(position);
+    this.#settle();
   }
 
   private handlePointerDown(event: PointerEvent): void {
-    if (event.button !== 0 || this.typed !== undefined) return;
+    if (event.button !== 0 || this.#drag !== undefined) return;
     event.preventDefault();
+    this.#settle();
     this.dial.focus();
     this.dial.setPointerCapture(event.pointerId);
     this.#drag = { pointer: event.pointerId, y: event.clientY, start: this.position };
@@ -113,11 +139,11 @@ export class NwKnob extends LitElement {
 
   private handlePointerUp(event: PointerEvent): void {
     if (this.#drag?.pointer !== event.pointerId) return;
-    const { start } = this.#drag;
     this.#drag = undefined;
-    if (this.position !== start) this.#tell('change');
+    this.#settle();
   }
 
+  /** Also where the capture is lost: a pointer that was let go has ended its drag before. */
   private handlePointerCancel(event: PointerEvent): void {
     if (this.#drag?.pointer !== event.pointerId) return;
     this.#endDragWhereItBegan();
@@ -127,76 +153,87 @@ export class NwKnob extends LitElement {
     if (this.#drag === undefined) return;
     const { start } = this.#drag;
     this.#drag = undefined;
-    if (this.#moveTo(start)) this.#tell('change');
+    this.#set(start);
   }
 
   private handleWheel(event: WheelEvent): void {
-    if (this.shadowRoot?.activeElement !== this.dial) return;
+    if (event.ctrlKey || this.shadowRoot?.activeElement !== this.dial) return;
     event.preventDefault();
-    const step = event.shiftKey ? FINE_STEP : STEP;
-    if (!this.#moveTo(this.position - Math.sign(event.deltaY || event.deltaX) * step)) return;
-    clearTimeout(this.#wheelSettles);
-    this.#wheelSettles = setTimeout(() => this.#settleWheel(), 250); // the wheel has no end of its own
-  }
-
-  #settleWheel(): void {
-    if (this.#wheelSettles === undefined) return;
-    clearTimeout(this.#wheelSettles);
-    this.#wheelSettles = undefined;
-    this.#tell('change');
+    const way = event.deltaY || event.deltaX; // some systems turn a wheel with Shift sideways
+    const inPixels = event.deltaMode === WheelEvent.DOM_DELTA_PIXEL;
+    const travel = inPixels ? way : Math.sign(way) * WHEEL_TRAVEL;
+    this.#scrolled = travel * this.#scrolled < 0 ? travel : this.#scrolled + travel;
+    if (Math.abs(this.#scrolled) < WHEEL_TRAVEL) return;
+    this.#moveBySteps(-Math.sign(this.#scrolled), event.shiftKey);
+    this.#scrolled = 0;
+    clearTimeout(this.#scrollRests);
+    this.#scrollRests = setTimeout(() => this.#settle(), WHEEL_REST);
   }
 
   private handleKey(event: KeyboardEvent): void {
     if (event.ctrlKey || event.metaKey || event.altKey) return;
-    const step = event.shiftKey ? FINE_STEP : STEP;
     const towardsEnd = getComputedStyle(this).direction === 'rtl' ? -1 : 1;
-    const moves: Readonly<Record<string, number>> = {
-      ArrowUp: this.position + step,
-      ArrowDown: this.position - step,
-      ArrowRight: this.position + towardsEnd * step,
-      ArrowLeft: this.position - towardsEnd * step,
-      PageUp: this.position + PAGE_STEPS * STEP,
-      PageDown: this.position - PAGE_STEPS * STEP,
+    const steps: Readonly<Record<string, number>> = {
+      ArrowUp: 1,
+      ArrowDown: -1,
+      ArrowRight: towardsEnd,
+      ArrowLeft: -towardsEnd,
+      PageUp: PAGE_STEPS,
+      PageDown: -PAGE_STEPS,
+    };
+    const places: Readonly<Record<string, number>> = {
       Home: 0,
       End: 1,
       Delete: this.fallback,
       Backspace: this.fallback,
     };
-    if (event.key === 'Escape' && this.#drag !== undefined) {
-      event.preventDefault();
-      this.#endDragWhereItBegan();
-    } else if (Object.hasOwn(moves, event.key)) {
-      event.preventDefault();
-      this.#set(Math.round(moves[event.key]! * 1e6) / 1e6);
-    } else if (/^[\d.,]$/.test(event.key)) {
-      event.preventDefault();
-      this.typed = event.key;
-    }
+    if (Object.hasOwn(steps, event.key)) {
+      this.#moveBySteps(steps[event.key]!, event.shiftKey && Math.abs(steps[event.key]!) === 1);
+    } else if (Object.hasOwn(places, event.key)) this.#moveTo(places[event.key]!);
+    else if (event.key === 'Escape' && this.#drag !== undefined) this.#endDragWhereItBegan();
+    else if (/^[\d.,]$/.test(event.key)) this.typed = event.key;
+    else return;
+    event.preventDefault();
+  }
+
+  /** A key held down moves on and on, and settles once. */
+  private handleKeyUp(): void {
+    if (this.#drag === undefined) this.#settle();
   }
 
   private handleEntryKey(event: KeyboardEvent): void {
     event.stopPropagation();
-    if (event.key === 'Enter') this.#commitEntry();
-    else if (event.key === 'Escape') this.typed = undefined;
-    else return;
+    if (event.key !== 'Enter' && event.key !== 'Escape') return;
     event.preventDefault();
+    if (event.key === 'Enter' && !this.#commitEntry()) return;
+    this.#closeEntry();
     this.dial.focus();
   }
 
   private handleEntryInput(event: Event): void {
     event.stopPropagation();
     this.typed = (event.target as HTMLInputElement).value;
+    this.refused = false;
   }
 
-  #commitEntry(): void {
-    const value = Number(this.typed?.trim().replace(',', '.'));
-    const isNumber = this.typed !== undefined && this.typed.trim() !== '' && Number.isFinite(value);
+  /** Takes what was typed; false where it is no position, and then it stays to be mended. */
+  #commitEntry(): boolean {
+    const parts = /^\s*(\d+(?:[.,]\d*)?|[.,]\d+)\s*(%?)\s*$/.exec(this.typed ?? '');
+    const position = parts ? Number(parts[1]!.replace(',', '.')) / (parts[2] === '%' ? 100 : 10) : Number.NaN;
+    this.refused = !(position <= 1);
+    if (!this.refused) this.#set(position);
+    return !this.refused;
+  }
+
+  #closeEntry(): void {
     this.typed = undefined;
-    if (isNumber) this.#set(value / 10);
+    this.refused = false;
   }
 
   private handleEntryBlur(): void {
-    if (this.typed !== undefined) this.#commitEntry();
+    if (this.typed === undefined) return;
+    this.#commitEntry();
+    this.#closeEntry();
   }
 
   /** Puts the focus on the dial. */
@@ -206,6 +243,7 @@ export class NwKnob extends LitElement {
 
   override render(): TemplateResult {
     const shown = (this.position * 10).toFixed(1);
+    const share = `${Math.round(this.position * 1000) / 10}\u202f%`;
     const [x1, y1] = pointAt(this.position, 38);
     const [x2, y2] = pointAt(this.position, 26);
     return html`
@@ -219,15 +257,18 @@ export class NwKnob extends LitElement {
         aria-labelledby="label"
         aria-valuemin="0"
         aria-valuemax="10"
-        aria-valuenow=${shown}
-        aria-valuetext=${this.spoken ? `${shown}, ${this.spoken}` : shown}
+        aria-valuenow=${Math.round(this.position * 1000) / 100}
+        aria-valuetext=${this.spoken ? `${this.spoken}, ${share}` : share}
         @pointerdown=${this.handlePointerDown}
         @pointermove=${this.handlePointerMove}
         @pointerup=${this.handlePointerUp}
         @pointercancel=${this.handlePointerCancel}
+        @lostpointercapture=${this.handlePointerCancel}
         @dblclick=${() => this.#set(this.fallback)}
         @wheel=${this.handleWheel}
         @keydown=${this.handleKey}
+        @keyup=${this.handleKeyUp}
+        @blur=${this.handleKeyUp}
       >
         <svg viewBox="0 0 100 96" aria-hidden="true">
           <g class="ticks">
@@ -250,6 +291,8 @@ export class NwKnob extends LitElement {
             class="entry"
             inputmode="decimal"
             aria-label="${this.label}, 0 to 10"
+            aria-invalid=${this.refused}
+            aria-describedby=${this.refused ? 'accepted' : nothing}
             .value=${this.typed}
             @input=${this.handleEntryInput}
             @change=${(event: Event) => event.stopPropagation()}
@@ -258,7 +301,11 @@ export class NwKnob extends LitElement {
           />`
       }
       </div>
-      <span class="readout" aria-hidden="true">${this.readout}</span>
+      ${
+        this.refused
+          ? html`<span class="readout refused" id="accepted" role="alert">0 to 10, or 0 to 100 %</span>`
+          : html`<span class="readout" aria-hidden="true">${this.readout}</span>`
+      }
     `;
   }
 }

@@ -17,7 +17,7 @@ export const menuStyles = css`
     background: var(--nw-sheet);
     border: 1px solid var(--nw-rule);
     border-radius: var(--nw-radius);
-    box-shadow: 0 8px 24px rgb(0 0 0 / 18%);
+    box-shadow: 0 8px 24px var(--nw-shadow);
   }
   :host([upwards]) .list {
     inset-block: auto calc(100% + 4px);

@@ -37,6 +37,8 @@ export class NwMenu extends LitElement {
   /** Opens above the button. */
   @property({ type: Boolean, reflect: true }) upwards = false;
 
+  #opensAtEnd = false;
+
   override disconnectedCallback(): void {
     super.disconnectedCallback();
     this.open = false;
@@ -44,7 +46,10 @@ export class NwMenu extends LitElement {
 
   override updated(changed: PropertyValues): void {
     if (!changed.has('open' as keyof this) || !this.open) return;
-    this.#itemButtons()[0]?.focus();
+    this.#itemButtons()
+      .at(this.#opensAtEnd ? -1 : 0)
+      ?.focus();
+    this.#opensAtEnd = false;
   }
 
   #itemButtons(): HTMLButtonElement[] {
@@ -59,6 +64,13 @@ export class NwMenu extends LitElement {
   #choose(id: string): void {
     this.#close();
     this.dispatchEvent(new CustomEvent('nw-choose', { detail: { id }, bubbles: true, composed: true }));
+  }
+
+  private handleButtonKey(event: KeyboardEvent): void {
+    if (this.open || (event.key !== 'ArrowDown' && event.key !== 'ArrowUp')) return;
+    event.preventDefault();
+    this.#opensAtEnd = event.key === 'ArrowUp';
+    this.open = true;
   }
 
   private handleFocusOut(event: FocusEvent): void {
@@ -91,6 +103,7 @@ export class NwMenu extends LitElement {
         aria-label=${this.spoken || nothing}
         aria-haspopup="menu"
         aria-expanded=${this.open}
+        @keydown=${this.handleButtonKey}
         @click=${() => {
           this.open = !this.open;
         }}

@@ -8,7 +8,7 @@ export const noticeStyles = css`
   .box {
     display: flex;
     gap: 8px;
-    align-items: flex-start;
+    align-items: center;
     border-inline-start: 3px solid var(--nw-accent);
     padding: 6px 4px 6px 12px;
     color: var(--nw-ink-soft);

@@ -3,7 +3,7 @@ import { customElement, property } from 'lit/decorators.js';
 import { baseStyles } from '../theme.ts';
 import { noticeStyles } from './nw-notice.styles.ts';
 
-/** `error` is spoken at once, the others when there is time. */
+/** How much a message matters: `error` is spoken at once, the others when there is time. */
 export type NoticeKind = 'info' | 'caution' | 'error';
 
 /**
@@ -23,7 +23,7 @@ export class NwNotice extends LitElement {
   @property({ type: Boolean }) dismissable = false;
 
   override render(): TemplateResult {
-    return html`<div class="box ${this.kind}" role=${this.kind === 'error' ? 'alert' : 'note'}>
+    return html`<div class="box ${this.kind}" role=${this.kind === 'error' ? 'alert' : 'status'}>
       <span class="text"><slot></slot></span>
       ${
         this.dismissable

@@ -8,13 +8,13 @@ export const partChipStyles = css`
   }
   button {
     font: inherit;
-    font-size: 14px;
+    font-size: 13px;
     color: var(--nw-ink-soft);
     background: var(--nw-paper);
     border: 1px solid var(--nw-rule);
     border-radius: 7px;
-    min-height: 32px;
-    padding: 2px 9px;
+    min-height: 30px;
+    padding: 2px 8px;
     cursor: pointer;
     text-align: start;
   }

@@ -1,8 +1,10 @@
 import { html, LitElement, nothing, type PropertyValues, type TemplateResult } from 'lit';
 import { customElement, property, query, state } from 'lit/decorators.js';
+import { live } from 'lit/directives/live.js';
+import { repeat } from 'lit/directives/repeat.js';
 import type { Block, BlockSettings, ChoiceSpec, PartSpec } from '../../src/blocks/block.ts';
 import { isUsedPart } from '../../src/blocks/settings.ts';
-import { SERIES_NAMES, type SeriesName } from '../../src/parts/series.ts';
+import type { SeriesName } from '../../src/parts/series.ts';
 import type { Taper } from '../../src/parts/taper.ts';
 import { send } from '../events.ts';
 import { SLOT_TITLES } from '../nw-block/nw-block.ts';
@@ -12,23 +14,27 @@ import type { NwValueField } from '../nw-value-field/nw-value-field.ts';
 import { baseStyles } from '../theme.ts';
 import { partsDrawerStyles } from './nw-parts-drawer.styles.ts';
 
-const LAWS: readonly { readonly law: Taper['law']; readonly label: string }[] = [
-  { law: 'linear', label: 'linear' },
-  { law: 'audio', label: 'audio' },
-  { law: 'reverse-audio', label: 'reverse audio' },
+const LAWS: readonly { readonly value: Taper['law']; readonly label: string }[] = [
+  { value: 'linear', label: 'linear' },
+  { value: 'audio', label: 'audio' },
+  { value: 'reverse-audio', label: 'reverse audio' },
 ];
 
+/** Share of the track at half turn that a curved taper may have here, in per cent, and what is usual. */
+const MIDPOINTS = { min: 2, max: 49, usual: 15 };
+
 /**
- * Everything a block is made of: its variant, its wiring, its parts with their values and what
- * raising them does, its potentiometers with their tapers.
+ * Everything a block is made of: its circuit, its wiring, its parts with their values and what
+ * raising them does, its potentiometers with their tapers. A modal panel at the side; Escape, the
+ * button and a press beside it close it.
  *
  * @slot drawing - the schematic
  * @slot stress - what the parts have to stand
- * @fires nw-variant-set - another variant was chosen
+ * @fires nw-variant-set - another circuit was chosen
  * @fires nw-choice-set - another option of a choice
  * @fires nw-part-set - a part got another value
  * @fires nw-taper-set - a potentiometer got another taper
- * @fires close - it was closed
+ * @fires close - the user closed it
  */
 @customElement('nw-parts-drawer')
 export class NwPartsDrawer extends LitElement {
@@ -36,7 +42,11 @@ export class NwPartsDrawer extends LitElement {
 
   @query('dialog') private dialog!: HTMLDialogElement;
 
-  @state() private series: SeriesName = 'E12';
+  /** Series that the fields step through, by kind of part. */
+  @state() private series: Readonly<Partial<Record<PartSpec['kind'], SeriesName>>> = {};
+
+  /** Knob whose midpoint was typed and cannot be used. */
+  @state() private refusedMidpoint: string | undefined;
 
   /** The block shown; undefined while the drawer is closed. */
   @property({ attribute: false }) block: Block | undefined;
@@ -44,61 +54,123 @@ export class NwPartsDrawer extends LitElement {
   /** Its settings. */
   @property({ attribute: false }) settings: BlockSettings | undefined;
 
-  /** Blocks that its slot can hold. */
+  /** Circuits that its place in the line can hold. */
   @property({ attribute: false }) variants: readonly Block[] = [];
 
-  override updated(changed: PropertyValues<this>): void {
-    if (!changed.has('block')) return;
-    if (this.block !== undefined && !this.dialog.open) this.dialog.showModal();
-    else if (this.block === undefined && this.dialog.open) this.dialog.close();
+  #pressedBeside = false;
+
+  override connectedCallback(): void {
+    super.connectedCallback();
+    if (this.hasUpdated) this.#openOrClose();
   }
 
+  override disconnectedCallback(): void {
+    super.disconnectedCallback();
+    this.dialog?.close();
+  }
+
+  override willUpdate(changed: PropertyValues<this>): void {
+    if (changed.has('block')) this.refusedMidpoint = undefined;
+  }
+
+  override updated(changed: PropertyValues<this>): void {
+    if (changed.has('block')) this.#openOrClose();
+  }
+
+  #openOrClose(): void {
+    if (this.block !== undefined && !this.dialog.open) this.dialog.showModal();
+    else if (this.block === undefined) this.dialog.close();
+  }
+
+  /** A dialog closed by code, or opened again since, has nothing to tell. */
   private handleClose(): void {
+    if (this.block === undefined || this.dialog.open || !this.isConnected) return;
     this.dispatchEvent(new Event('close'));
   }
 
-  private handleBackdrop(event: MouseEvent): void {
-    if (event.target === this.dialog) this.dialog.close();
+  private handlePress(event: PointerEvent): void {
+    this.#pressedBeside = event.target === this.dialog;
   }
 
-  #choice(name: string, choice: ChoiceSpec, settings: BlockSettings): TemplateResult {
-    return html`<label>
-      <span class="what">${choice.label}</span>
-      <select
-        @change=${(event: Event) =>
-          send(this, 'nw-choice-set', {
-            slot: this.block!.slot,
-            choice: name,
-            value: (event.target as HTMLSelectElement).value,
-          })}
-      >
-        ${choice.options.map(
-          (option) => html`<option
-            value=${option.value}
-            ?selected=${settings.choices[name] === option.value}
-          >
-            ${option.label}
-          </option>`,
-        )}
-      </select>
-      <span class="soft">${choice.help}</span>
-    </label>`;
+  private handleClick(event: MouseEvent): void {
+    if (this.#pressedBeside && event.target === this.dialog) this.dialog.close();
+  }
+
+  private handleMidpoint(event: Event, knob: string, taper: Taper): void {
+    const share = (event.target as HTMLInputElement).valueAsNumber;
+    const isAccepted = share >= MIDPOINTS.min && share <= MIDPOINTS.max;
+    this.refusedMidpoint = isAccepted ? undefined : knob;
+    if (isAccepted) this.#setTaper(knob, { ...taper, midpoint: share / 100 });
+  }
+
+  #setLaw(knob: string, law: Taper['law'], { midpoint }: Taper): void {
+    const usable = midpoint < 0.5 ? midpoint : MIDPOINTS.usual / 100;
+    this.refusedMidpoint = undefined;
+    this.#setTaper(knob, { law, midpoint: law === 'linear' ? 0.5 : usable });
+  }
+
+  #setTaper(knob: string, taper: Taper): void {
+    send(this, 'nw-taper-set', { slot: this.block!.slot, knob, taper });
+  }
+
+  #select(
+    chosen: string,
+    options: ChoiceSpec['options'],
+    choose: (value: string) => void,
+    name?: string,
+  ): TemplateResult {
+    return html`<select
+      aria-label=${name ?? nothing}
+      @change=${(event: Event) => choose((event.target as HTMLSelectElement).value)}
+    >
+      ${options.map(
+        ({ value, label }) =>
+          html`<option value=${value} .selected=${live(value === chosen)}>${label}</option>`,
+      )}
+    </select>`;
+  }
+
+  #choices(block: Block, settings: BlockSettings): TemplateResult {
+    const { slot } = block;
+    const circuits = this.variants.map(({ variant, title }) => ({ value: variant, label: title }));
+    return html`<div class="choices">
+      ${
+        circuits.length < 2
+          ? nothing
+          : html`<label>
+            <span class="name">Circuit</span>
+            ${this.#select(block.variant, circuits, (variant) => send(this, 'nw-variant-set', { slot, variant }))}
+            <span class="soft">Settings of the one you leave are kept.</span>
+          </label>`
+      }
+      ${Object.entries(block.choices).map(
+        ([choice, { label, options, help }]) => html`<label>
+          <span class="name">${label}</span>
+          ${this.#select(settings.choices[choice]!, options, (value) => send(this, 'nw-choice-set', { slot, choice, value }))}
+          <span class="soft">${help}</span>
+        </label>`,
+      )}
+    </div>`;
   }
 
   #part(name: string, part: PartSpec, settings: BlockSettings): TemplateResult {
     const knobs = Object.entries(this.block!.knobs).filter(([, knob]) => knob.part === name);
     return html`<li>
       <span class="designator">${part.designator}</span>
-      <span class="what">
-        ${part.label}
+      <div class="what">
+        <span class="name">${part.label}</span>
         <p class="soft">${part.help}</p>
-      </span>
+      </div>
       <nw-value-field
         .label=${part.label}
         .unit=${part.unit}
         .range=${part.range}
-        .series=${this.series}
+        .series=${this.series[part.kind] ?? 'E12'}
+        .seriesChoice=${part.kind !== 'quantity'}
         .value=${settings.parts[name]!}
+        @nw-series-set=${(event: HTMLElementEventMap['nw-series-set']) => {
+          this.series = { ...this.series, [part.kind]: event.detail.series };
+        }}
         @change=${(event: Event) =>
           send(this, 'nw-part-set', {
             slot: this.block!.slot,
@@ -111,100 +183,61 @@ export class NwPartsDrawer extends LitElement {
   }
 
   #taper(knob: string, label: string, taper: Taper): TemplateResult {
-    const set = (next: Taper): void =>
-      send(this, 'nw-taper-set', { slot: this.block!.slot, knob, taper: next });
-    return html`<span class="taper">
-      <select
-        aria-label="Taper of ${label}"
-        @change=${(event: Event) => {
-          const law = (event.target as HTMLSelectElement).value as Taper['law'];
-          set({ law, midpoint: law === 'linear' ? 0.5 : taper.midpoint < 0.5 ? taper.midpoint : 0.15 });
-        }}
+    return html`<div class="taper">
+      <span class="soft" aria-hidden="true">Taper</span>
+      ${this.#select(taper.law, LAWS, (law) => this.#setLaw(knob, law as Taper['law'], taper), `Taper of ${label}`)}
+      ${taper.law === 'linear' ? nothing : this.#midpoint(knob, label, taper)}
+    </div>`;
+  }
+
+  #midpoint(knob: string, label: string, taper: Taper): TemplateResult {
+    const isRefused = this.refusedMidpoint === knob;
+    const shown = String(Math.round(taper.midpoint * 1000) / 10);
+    return html`
+      <input
+        class="field"
+        type="number"
+        min=${MIDPOINTS.min}
+        max=${MIDPOINTS.max}
+        step="any"
+        aria-label="${label}: per cent of the track at half turn"
+        aria-invalid=${isRefused}
+        aria-describedby=${isRefused ? `midpoint-${knob}` : nothing}
+        .value=${isRefused ? nothing : live(shown)}
+        @change=${(event: Event) => this.handleMidpoint(event, knob, taper)}
+      />
+      <span class="soft" aria-hidden="true">% of the track at half turn</span>
+      <span class="message" id="midpoint-${knob}" role="status"
+        >${isRefused ? `${MIDPOINTS.min} to ${MIDPOINTS.max} % is accepted; ${shown} % stays in force.` : ''}</span
       >
-        ${LAWS.map(({ law, label: words }) => html`<option value=${law} ?selected=${taper.law === law}>${words}</option>`)}
-      </select>
-      ${
-        taper.law === 'linear'
-          ? nothing
-          : html`<label
-            ><input
-              class="field"
-              type="number"
-              min="2"
-              max="49"
-              step="1"
-              aria-label="${label}: per cent of the track at half turn"
-              .value=${String(Math.round(taper.midpoint * 1000) / 10)}
-              @change=${(event: Event) => {
-                const field = event.target as HTMLInputElement;
-                if (field.checkValidity() && field.value !== '')
-                  set({ ...taper, midpoint: field.valueAsNumber / 100 });
-                else field.value = String(taper.midpoint * 100);
-              }}
-            />
-            <span class="soft">% at half turn</span></label
-          >`
-      }
-    </span>`;
+    `;
   }
 
   #inside(block: Block, settings: BlockSettings): TemplateResult {
     const parts = Object.entries(block.parts).filter(([name]) => isUsedPart(block, settings, name));
     return html`
+      <header>
+        <h2 tabindex="-1" autofocus>${SLOT_TITLES[block.slot]}: ${block.title}</h2>
+        <button class="button" @click=${() => this.dialog.close()}>Close</button>
+      </header>
       <div class="inside">
-        <header>
-          <h2>${SLOT_TITLES[block.slot]}: ${block.title}</h2>
-          <button class="button" @click=${() => this.dialog.close()}>Close</button>
-        </header>
         <p class="soft">${block.summary}</p>
         <slot name="drawing"></slot>
-        <div class="choices">
-          ${
-            this.variants.length > 1
-              ? html`<label>
-                <span class="what">Circuit</span>
-                <select
-                  @change=${(event: Event) =>
-                    send(this, 'nw-variant-set', {
-                      slot: block.slot,
-                      variant: (event.target as HTMLSelectElement).value,
-                    })}
-                >
-                  ${this.variants.map(
-                    ({
-                      variant,
-                      title,
-                    }) => html`<option value=${variant} ?selected=${variant === block.variant}>
-                      ${title}
-                    </option>`,
-                  )}
-                </select>
-                <span class="soft">Settings of the one you leave are kept.</span>
-              </label>`
-              : nothing
-          }
-          ${Object.entries(block.choices).map(([name, choice]) => this.#choice(name, choice, settings))}
-          <label>
-            <span class="what">Steps of the value fields</span>
-            <select
-              @change=${(event: Event) => {
-                this.series = (event.target as HTMLSelectElement).value as SeriesName;
-              }}
-            >
-              ${SERIES_NAMES.map((name) => html`<option ?selected=${name === this.series}>${name}</option>`)}
-            </select>
-          </label>
-        </div>
-        <h3>Parts</h3>
-        <ul>
-          ${parts.map(([name, part]) => this.#part(name, part, settings))}
-        </ul>
-        <slot name="stress"></slot>
+        ${this.#choices(block, settings)}
         <nw-notice kind="caution"
           >Valve amplifiers hold hundreds of volts, also when switched off and unplugged: capacitors keep their
           charge. Leave building and measuring inside one to qualified people, and follow the electrical code
           where you live first.</nw-notice
         >
+        <h3 id="parts">Parts</h3>
+        <ul aria-labelledby="parts">
+          ${repeat(
+            parts,
+            ([name]) => `${block.slot}/${block.variant}/${name}`,
+            ([name, part]) => this.#part(name, part, settings),
+          )}
+        </ul>
+        <slot name="stress"></slot>
       </div>
     `;
   }
@@ -214,7 +247,8 @@ export class NwPartsDrawer extends LitElement {
     return html`<dialog
       aria-label=${block ? `Parts of the ${SLOT_TITLES[block.slot].toLowerCase()}` : 'Parts'}
       @close=${this.handleClose}
-      @click=${this.handleBackdrop}
+      @pointerdown=${this.handlePress}
+      @click=${this.handleClick}
     >
       ${block && settings ? this.#inside(block, settings) : nothing}
     </dialog>`;

@@ -31,7 +31,7 @@ export const plotPanelStyles = css`
   }
   .body {
     display: grid;
-    grid-template-columns: minmax(0, 1fr) 190px;
+    grid-template-columns: minmax(0, 1fr) 196px;
     min-height: 0;
   }
   .plot {
@@ -50,7 +50,7 @@ export const plotPanelStyles = css`
   }
   .figures {
     border-inline-start: 1px solid var(--nw-hairline);
-    padding: 12px 14px;
+    padding: 8px 14px;
     overflow: auto;
   }
   .toggle {
@@ -106,6 +106,11 @@ export const plotPanelStyles = css`
     }
     .views {
       margin-inline-start: 0;
+      gap: 0;
+    }
+    .toggle {
+      padding: 0 7px;
+      font-size: 13px;
     }
   }
   @media (pointer: coarse) {

@@ -137,7 +137,7 @@ export class NwPlotPanel extends LitElement {
                 ></nw-plot>
               </div>`
           }
-          <div class="figures">
+          <div class="figures" role="group" aria-label="Figures" tabindex="0">
             <nw-figures .figures=${this.figures} .reference=${this.words.reference}></nw-figures>
           </div>
         </div>

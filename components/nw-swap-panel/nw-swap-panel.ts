@@ -66,7 +66,7 @@ export class NwSwapPanel extends LitElement {
         <button
           class="key"
           aria-pressed=${candidate.value === this.tried || (isPresent && this.tried === undefined)}
-          aria-label="Hear ${text}"
+          aria-label="${index + 1}: hear ${text}"
           @click=${() => this.#tryValue(candidate.value)}
         >
           ${index + 1}

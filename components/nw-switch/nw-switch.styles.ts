@@ -27,22 +27,25 @@ export const switchStyles = css`
   input::after {
     content: '';
     position: absolute;
-    inset: 2px auto auto 2px;
+    inset-block-start: 2px;
+    inset-inline-start: 2px;
     width: 14px;
     height: 14px;
     border-radius: 50%;
     background: var(--nw-sheet);
-    transition: translate 120ms;
+    transition: inset-inline-start 120ms;
   }
   input:checked {
     background: var(--nw-accent);
   }
   input:checked::after {
-    translate: 12px 0;
+    inset-inline-start: 14px;
   }
   @media (pointer: coarse) {
     label {
       min-height: 44px;
+      min-width: 44px;
+      justify-content: flex-end;
     }
   }
 `;

@@ -4,6 +4,7 @@ import { css } from 'lit';
 export const tabsStyles = css`
   :host {
     display: block;
+    container-type: inline-size;
   }
   .list {
     display: flex;
@@ -18,7 +19,7 @@ export const tabsStyles = css`
     border: 0;
     border-block-end: 3px solid transparent;
     min-height: 48px;
-    padding: 0 10px;
+    padding: 0 clamp(4px, 2cqi, 10px);
     cursor: pointer;
   }
   button:hover {

@@ -35,7 +35,10 @@ export class NwTabs extends LitElement {
   }
 
   private async handleKey(event: KeyboardEvent): Promise<void> {
-    const index = this.tabs.findIndex((tab) => tab.id === this.chosen);
+    const index = Math.max(
+      0,
+      this.tabs.findIndex((tab) => tab.id === this.chosen),
+    );
     const last = this.tabs.length - 1;
     const forward = getComputedStyle(this).direction === 'rtl' ? -1 : 1;
     const places: Readonly<Record<string, number>> = {
@@ -53,6 +56,7 @@ export class NwTabs extends LitElement {
   }
 
   override render(): TemplateResult {
+    const reached = this.tabs.some((tab) => tab.id === this.chosen) ? this.chosen : this.tabs[0]?.id;
     return html`
       <div class="list" role="tablist" aria-label=${this.label} @keydown=${this.handleKey}>
         ${this.tabs.map(
@@ -61,7 +65,7 @@ export class NwTabs extends LitElement {
             id="tab-${tab.id}"
             aria-selected=${tab.id === this.chosen}
             aria-controls="panel"
-            tabindex=${tab.id === this.chosen ? 0 : -1}
+            tabindex=${tab.id === reached ? 0 : -1}
             @click=${() => this.#choose(tab.id)}
           >
             ${tab.label}

@@ -4,14 +4,16 @@ import { css } from 'lit';
 export const valueFieldStyles = css`
   :host {
     display: inline-grid;
-    gap: 4px;
     min-width: 0;
   }
   .row {
     display: flex;
     gap: 4px;
   }
-  .field {
+  .row > * {
+    flex: none;
+  }
+  .row > .field {
     width: 12ch;
     min-width: 0;
     flex: 1 1 auto;
@@ -20,9 +22,22 @@ export const valueFieldStyles = css`
   .field[aria-invalid='true'] {
     border-color: var(--nw-caution);
   }
+  .series {
+    color: var(--nw-ink-soft);
+    font-size: 13px;
+    border-color: transparent;
+    background: none;
+    padding-inline: 4px 0;
+  }
+  .series:hover {
+    border-color: var(--nw-rule);
+  }
   .message {
     color: var(--nw-caution);
     font-size: 13px;
     max-width: 34ch;
+  }
+  .message:not(:empty) {
+    margin-block-start: 4px;
   }
 `;

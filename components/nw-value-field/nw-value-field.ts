@@ -1,18 +1,41 @@
 import { html, LitElement, nothing, type PropertyValues, type TemplateResult } from 'lit';
 import { customElement, property, query, state } from 'lit/decorators.js';
+import { live } from 'lit/directives/live.js';
 import { messageOf } from '../../src/errors.ts';
-import { next, type SeriesName } from '../../src/parts/series.ts';
+import { next, SERIES_NAMES, type SeriesName, seriesValues } from '../../src/parts/series.ts';
 import { formatValue, parseValue, speakValue } from '../../src/parts/value-text.ts';
 import type { UnitSymbol } from '../../src/units.ts';
+import { send } from '../events.ts';
 import { baseStyles } from '../theme.ts';
 import { valueFieldStyles } from './nw-value-field.styles.ts';
 
+/** First value above nothing, in each unit: a preferred series has no zero to step to or from. */
+const LEAST: Readonly<Record<UnitSymbol, number>> = {
+  Ω: 1,
+  F: 1e-12,
+  H: 1e-6,
+  S: 1e-6,
+  V: 1,
+  A: 1e-6,
+  W: 1e-3,
+  ratio: 0.1,
+};
+
+/** A value so many preferred values up or down; through zero to the other sign. */
+function stepped(value: number, series: SeriesName, unit: UnitSymbol, steps: number): number {
+  if (value === 0) return Math.sign(steps) * LEAST[unit];
+  if (value < 0) return -stepped(-value, series, unit, -steps);
+  const result = next(value, series, steps);
+  return steps < 0 && result < LEAST[unit] ? 0 : result;
+}
+
 /**
  * A field for a part's value. It reads what people write on parts, steps through a series of
- * preferred values by arrow keys or buttons, and where it cannot read something says what it
- * accepts; what was typed stays, and the last good value stays in force.
+ * preferred values by arrow keys or buttons (Page keys: a decade), and where it cannot read something
+ * says what it accepts; what was typed stays, and the last good value stays in force.
  *
  * @fires change - the value changed; read `value`
+ * @fires nw-series-set - another series was chosen, where it can be (`{ series: SeriesName }`)
  */
 @customElement('nw-value-field')
 export class NwValueField extends LitElement {
@@ -40,6 +63,9 @@ export class NwValueField extends LitElement {
   /** Series that arrows and buttons step through. */
   @property() series: SeriesName = 'E12';
 
+  /** Whether the series can be chosen here. */
+  @property({ type: Boolean, attribute: 'series-choice' }) seriesChoice = false;
+
   override willUpdate(changed: PropertyValues<this>): void {
     if (changed.has('value') && changed.get('value') !== undefined) this.#forget();
   }
@@ -56,13 +82,29 @@ export class NwValueField extends LitElement {
     this.dispatchEvent(new Event('change', { bubbles: true, composed: true }));
   }
 
-  #step(steps: number): void {
+  /** The value that was typed; undefined, and said why, where it cannot be used. */
+  #readTyped(typed: string): number | undefined {
     const [min, max] = this.range;
-    const from =
-      this.value > 0 ? next(this.value, this.series, steps) : steps > 0 ? Math.max(min, 1e-12) : min;
-    if (from >= min && from <= max) this.#accept(from);
-    else
-      this.problem = `That is the end: ${formatValue(min, this.unit)} to ${formatValue(max, this.unit)} is accepted.`;
+    try {
+      return parseValue(typed, this.unit, { min, max });
+    } catch (error) {
+      this.typed = typed;
+      this.problem = `${messageOf(error)} ${formatValue(this.value, this.unit)} stays in force.`;
+      return undefined;
+    }
+  }
+
+  #step(steps: number): void {
+    const { series, unit, range, typed } = this;
+    const from = typed === undefined ? this.value : this.#readTyped(typed);
+    if (from === undefined) return;
+    const value = stepped(from, series, unit, steps);
+    const [min, max] = range;
+    if (value >= min && value <= max) this.#accept(value);
+    else {
+      const words = (figure: number): string => formatValue(figure, unit);
+      this.problem = `${words(min)} to ${words(max)} is accepted; the next value in ${series} would be ${words(value)}.`;
+    }
   }
 
   private handleInput(event: Event): void {
@@ -72,25 +114,33 @@ export class NwValueField extends LitElement {
 
   private handleChange(event: Event): void {
     event.stopPropagation();
-    const typed = this.input.value;
-    const [min, max] = this.range;
-    try {
-      this.#accept(parseValue(typed, this.unit, { min, max }));
-    } catch (error) {
-      this.typed = typed;
-      this.problem = `${messageOf(error)} ${formatValue(this.value, this.unit)} stays in force.`;
-    }
+    if (this.typed === undefined) return;
+    const value = this.#readTyped(this.input.value);
+    if (value !== undefined) this.#accept(value);
   }
 
   private handleKey(event: KeyboardEvent): void {
-    const steps: Readonly<Record<string, number>> = { ArrowUp: 1, ArrowDown: -1, PageUp: 12, PageDown: -12 };
+    const decade = seriesValues(this.series).length;
+    const steps: Readonly<Record<string, number>> = {
+      ArrowUp: 1,
+      ArrowDown: -1,
+      PageUp: decade,
+      PageDown: -decade,
+    };
     if (Object.hasOwn(steps, event.key)) {
       event.preventDefault();
       this.#step(steps[event.key]!);
     } else if (event.key === 'Escape' && this.typed !== undefined) {
+      event.preventDefault(); // it would close the dialog around the field
       event.stopPropagation();
       this.#forget();
     }
+  }
+
+  private handleSeries(event: Event): void {
+    event.stopPropagation();
+    this.series = (event.target as HTMLSelectElement).value as SeriesName;
+    send(this, 'nw-series-set', { series: this.series });
   }
 
   /** Puts the focus into the field and selects what is in it. */
@@ -99,37 +149,48 @@ export class NwValueField extends LitElement {
     this.input?.select();
   }
 
+  /** Arrow keys do the same from within the field, so the buttons are no stops of the Tab key. */
+  #stepButton(sign: string, words: string, steps: number): TemplateResult {
+    return html`<button
+      class="button icon"
+      tabindex="-1"
+      aria-label="${this.label}: next ${words} in ${this.series}"
+      @click=${() => this.#step(steps)}
+    >
+      ${sign}
+    </button>`;
+  }
+
   override render(): TemplateResult {
-    const shown = this.typed ?? formatValue(this.value, this.unit);
     return html`
       <div class="row">
-        <button
-          class="button icon"
-          aria-label="${this.label}: one value down in ${this.series}"
-          @click=${() => this.#step(-1)}
-        >
-          −
-        </button>
+        ${this.#stepButton('−', 'lower value', -1)}
         <input
           class="field"
           aria-label=${this.label}
           aria-invalid=${this.problem !== ''}
           aria-describedby=${this.problem ? 'problem' : nothing}
           autocomplete="off"
+          autocapitalize="off"
           spellcheck="false"
           title=${speakValue(this.value, this.unit)}
-          .value=${shown}
+          .value=${live(this.typed ?? formatValue(this.value, this.unit))}
           @input=${this.handleInput}
           @change=${this.handleChange}
           @keydown=${this.handleKey}
         />
-        <button
-          class="button icon"
-          aria-label="${this.label}: one value up in ${this.series}"
-          @click=${() => this.#step(1)}
-        >
-          +
-        </button>
+        ${this.#stepButton('+', 'higher value', 1)}
+        ${
+          this.seriesChoice
+            ? html`<select
+              class="series"
+              aria-label="${this.label}: series that is stepped through"
+              @change=${this.handleSeries}
+            >
+              ${SERIES_NAMES.map((name) => html`<option .selected=${live(name === this.series)}>${name}</option>`)}
+            </select>`
+            : nothing
+        }
       </div>
       <span class="message" id="problem" role="status">${this.problem}</span>
     `;

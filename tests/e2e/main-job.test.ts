@@ -64,7 +64,7 @@ describe.each(browsers)('the main job in %s', (_, open) => {
         'the swap panel',
       );
       const present = await figures();
-      await driver.click('nw-app', 'nw-swap-panel', 'button=>Hear 560');
+      await driver.click('nw-app', 'nw-swap-panel', 'button=>hear 560');
       await driver.until(
         ['nw-app', 'nw-swap-panel'],
         "element.shadowRoot.textContent.includes('Keep 560')",
