@@ -1,6 +1,6 @@
 import type { NodePair } from '../circuit/wiring.ts';
 import type { Taper } from '../parts/taper.ts';
-import type { Ohms, Rotation, TrackRatio, UnitSymbol } from '../units.ts';
+import type { Ohms, Rotation, TrackRatio, UnitSymbol, Volts } from '../units.ts';
 
 /** The places of a line, in the order in which the signal passes them. */
 export const SLOTS = ['input', 'stage', 'volume', 'driver', 'tone', 'power', 'speaker'] as const;
@@ -100,6 +100,18 @@ export interface Neighbours {
   readonly after: Block | undefined;
 }
 
+/** What direct voltages a driver puts on its parts and on whatever it feeds. */
+export interface DirectOutput {
+  /** Supply voltage: what the output's electrode reaches while valves are still cold. */
+  readonly supply: Volts;
+  /** Voltage at rest of the electrode that feeds the output, valves warm, the load given attached. */
+  readonly voltage: Volts;
+  /** The coupling capacitor between that electrode and `out`, by part; `undefined` where they are joined. */
+  readonly couplingCap: string | undefined;
+  /** The block's own resistors that carry direct current, by part, with the voltage across each. */
+  readonly resistors: Readonly<Record<string, { readonly running: Volts; readonly cold: Volts }>>;
+}
+
 /** A control block as the catalogue declares it: a netlist with its parts, knobs and usual values. */
 export interface Block {
   readonly slot: SlotName;
@@ -127,6 +139,13 @@ export interface Block {
    * own magnitude at 1 kHz with these knobs at these positions, all else as set.
    */
   readonly referenceKnobs?: Readonly<Record<string, Rotation>>;
+  /**
+   * Direct voltages of a driver, feeding a direct-current load to ground (Infinity for none).
+   *
+   * @throws NotchworkError `circuit-unsolvable` or `value-out-of-range` where the values give no
+   *   sensible state of rest; every part it depends on has been read by then.
+   */
+  direct?(values: BlockValues, load: Ohms): DirectOutput;
   /** What the block is doing now, in a few words, for the line under its name. */
   describe(settings: BlockSettings): string;
 }

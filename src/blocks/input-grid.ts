@@ -1,11 +1,10 @@
-import { TRIODE_NAMES, TRIODES } from '../parts/valve.ts';
+import { TRIODES } from '../parts/valve.ts';
 import type { Block, BlockValues } from './block.ts';
-import { TRIODE_CHOICE } from './triode.ts';
+import { knownTriode, TRIODE_CHOICE, valveWords } from './triode.ts';
 
 /** Capacitances of a valve typed in: those of the ECC83, which its figures usually resemble. */
 function gridCapacitance(values: BlockValues): number {
-  const name = TRIODE_NAMES.find((entry) => entry === values.choice('valve')) ?? 'ECC83';
-  const { gridPlate, gridCathode } = TRIODES[name].capacitance;
+  const { gridPlate, gridCathode } = (knownTriode(values) ?? TRIODES.ECC83).capacitance;
   return gridCathode + gridPlate * (1 + values.part('stageGain')) + values.part('wiringCapacitance');
 }
 
@@ -105,6 +104,5 @@ export const inputGrid: Block = {
       value: { compute: gridCapacitance, text: 'Cgk + Cgp·(1 + gain) + wiring' },
     },
   ],
-  describe: (settings) =>
-    `into an ${settings.choices['valve'] === 'typed' ? 'own valve' : settings.choices['valve']}`,
+  describe: (settings) => `into an ${valveWords(settings)}`,
 };

@@ -65,7 +65,7 @@ export function withPart(settings: BlockSettings, part: string, value: number): 
 /** No neighbours: enough to see which parts a block's choices use. */
 const ALONE: Neighbours = { before: undefined, after: undefined };
 
-/** Parts whose values a block's present wiring takes in, by name. */
+/** Parts whose values a block's present wiring and direct voltages take in, by name. */
 function usedParts(block: Block, settings: BlockSettings): ReadonlySet<string> {
   const used = new Set<string>();
   const reader = valuesOf(settings);
@@ -85,12 +85,18 @@ function usedParts(block: Block, settings: BlockSettings): ReadonlySet<string> {
     else if ('knob' in value) used.add(need(block.knobs, value.knob, 'knob').part);
     else value.compute(spy);
   }
+  try {
+    block.direct?.(spy, Number.POSITIVE_INFINITY);
+  } catch (error) {
+    // Values without a state of rest; the parts it would depend on have been read all the same.
+    if (!(error instanceof NotchworkError)) throw error;
+  }
   return used;
 }
 
 const usedByChoices = new WeakMap<Block, WeakMap<object, ReadonlySet<string>>>();
 
-/** Whether a part does anything in the wiring that the block's choices give it. */
+/** Whether a part does anything, to the signal or to direct voltages, in the wiring that the block's choices give. */
 export function isUsedPart(block: Block, settings: BlockSettings, part: string): boolean {
   let byChoices = usedByChoices.get(block);
   if (byChoices === undefined) {

@@ -1,5 +1,15 @@
+import { commonCathodePoint } from '../parts/operating-point.ts';
 import type { Block, BlockElement } from './block.ts';
-import { TRIODE_CHOICE, TRIODE_PARTS, triode } from './triode.ts';
+import { SUPPLY_PART } from './rest.ts';
+import { FIGURES_CHOICE, type RestOf, TRIODE_CHOICE, TRIODE_PARTS, triode, valveWords } from './triode.ts';
+
+/** Where the stage rests: the model of its valve on the load line of its parts. */
+const rest: RestOf = (values, model) =>
+  commonCathodePoint(model, {
+    supply: values.part('supply'),
+    plateLoad: values.part('plateLoad'),
+    cathodeResistor: values.part('cathodeResistor'),
+  });
 
 /**
  * A common-cathode triode stage as a small-signal circuit: plate load, cathode resistor without, with
@@ -74,10 +84,15 @@ export const stageCommonCathode: Block = {
       range: [1e3, 22e6],
       help: 'Raise it and the stage keeps more gain and more bass.',
     },
+    supply: {
+      ...SUPPLY_PART,
+      help: 'Raise it and the valve rests at more current, with more gain. Used for figures at the point of rest.',
+    },
   },
   knobs: {},
   choices: {
     valve: TRIODE_CHOICE,
+    figures: FIGURES_CHOICE,
     bypass: {
       label: 'Cathode bypass',
       options: [
@@ -112,7 +127,7 @@ export const stageCommonCathode: Block = {
             ]
           : [{ kind: 'capacitor', name: 'bypassCap', nodes: ['cathode', '0'], value: { part: 'bypassCap' } }];
     return [
-      ...triode('in', 'plate', 'cathode'),
+      ...triode('in', 'plate', 'cathode', rest),
       { kind: 'resistor', name: 'plateLoad', nodes: ['plate', '0'], value: { part: 'plateLoad' } },
       {
         kind: 'resistor',
@@ -129,6 +144,6 @@ export const stageCommonCathode: Block = {
     const bypass = { full: 'bypassed', partial: 'partly bypassed', none: 'no bypass' }[
       settings.choices['bypass'] ?? ''
     ];
-    return `${settings.choices['valve'] === 'typed' ? 'own valve' : settings.choices['valve']}, ${bypass ?? ''}`;
+    return `${valveWords(settings)}, ${bypass ?? ''}`;
   },
 };
