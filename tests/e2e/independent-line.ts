@@ -35,8 +35,8 @@ function circuits({ treble, trebleCap, presence }: LineValues): {
     of('capacitor', 'c2', 'd', 'b', 33e-9),
     of('resistor', 'r2', 'b', 'e', 500e3 * bassShare),
     of('capacitor', 'c3', 'd', 'f', 22e-9),
-    of('resistor', 'r3u', 'e', 'f', 12.5e3),
-    of('resistor', 'r3l', 'f', '0', 12.5e3),
+    of('resistor', 'r3u', 'e', 'f', 12_500),
+    of('resistor', 'r3l', 'f', '0', 12_500),
     of('resistor', 'rl', 'o', '0', 1e6),
     of('capacitor', 'cl', 'o', '0', 47e-12),
   ];

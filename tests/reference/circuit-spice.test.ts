@@ -14,9 +14,14 @@ import { runSpice, spiceText } from './spice-engine.ts';
 const SWEEP = '.ac dec 12 10 40k';
 
 /** The largest differences from the SPICE engine, in dB and in degrees, over 10 Hz to 40 kHz. */
-async function differences(wiring: Wiring, values: ArrayLike<number>): Promise<{ decibels: number; degrees: number }> {
+async function differences(
+  wiring: Wiring,
+  values: ArrayLike<number>,
+): Promise<{ decibels: number; degrees: number }> {
   // The engine writes a short as a milliohm, so ours is given the same.
-  const same = Array.from(wiring.elements, (element, index) => (element.kind === 'resistor' ? Math.max(values[index]!, 1e-3) : values[index]!));
+  const same = Array.from(wiring.elements, (element, index) =>
+    element.kind === 'resistor' ? Math.max(values[index]!, 1e-3) : values[index]!,
+  );
   const transfer = compile({ ...wiring, outputs: [wiring.outputs[0]!] }).transfer(same);
   const { frequencies, re, im } = await runSpice(spiceText(wiring, same, SWEEP), wiring.outputs[0]![0]);
   const worst = { decibels: 0, degrees: 0 };
@@ -27,7 +32,10 @@ async function differences(wiring: Wiring, values: ArrayLike<number>): Promise<{
     if (b < 1e-6) return;
     const turn = Math.atan2(ours.im, ours.re) - Math.atan2(im[index]!, re[index]!);
     worst.decibels = Math.max(worst.decibels, Math.abs(20 * Math.log10(a / b)));
-    worst.degrees = Math.max(worst.degrees, Math.abs(turn - 2 * Math.PI * Math.round(turn / (2 * Math.PI))) * (180 / Math.PI));
+    worst.degrees = Math.max(
+      worst.degrees,
+      Math.abs(turn - 2 * Math.PI * Math.round(turn / (2 * Math.PI))) * (180 / Math.PI),
+    );
   });
   return worst;
 }
@@ -48,7 +56,10 @@ function randomPlaced(block: Block, random: () => number): PlacedBlock {
     }),
   );
   const choices = Object.fromEntries(
-    Object.entries(block.choices).map(([name, { options }]) => [name, options[Math.floor(random() * options.length)]!.value]),
+    Object.entries(block.choices).map(([name, { options }]) => [
+      name,
+      options[Math.floor(random() * options.length)]!.value,
+    ]),
   );
   return { block, settings: { ...fallback, parts, knobs, choices } };
 }
@@ -56,7 +67,10 @@ function randomPlaced(block: Block, random: () => number): PlacedBlock {
 async function expectAgreement(placed: readonly PlacedBlock[]): Promise<void> {
   for (const span of spansOf(placed)) {
     const circuit = span.circuits.at(-1)!;
-    const { decibels, degrees } = await differences(circuit.network.wiring, elementValues(circuit, span.blocks));
+    const { decibels, degrees } = await differences(
+      circuit.network.wiring,
+      elementValues(circuit, span.blocks),
+    );
     expect(decibels).toBeLessThan(1e-6);
     expect(degrees).toBeLessThan(1e-5);
   }
@@ -80,24 +94,26 @@ describe('against the SPICE engine, 1e-6 dB and 1e-5 degrees', () => {
     for (let index = 0; index < 50; index += 1) await expectAgreement([randomPlaced(power!, random)]);
   });
 
-  it.each(SLOTS.flatMap((slot) => blocksOf(slot).map((block) => [`${slot} ${block.variant}`, block] as const)))(
-    '%s, 6 random cases',
-    async (_, block) => {
-      const random = seededRandom(33);
-      for (let index = 0; index < 6; index += 1) {
-        // A driver is loaded by a network, as it is in a line; alone it would feed nothing.
-        const placed = [randomPlaced(block, random)];
-        if (block.slot === 'driver') placed.push(randomPlaced(threeKnob!, random));
-        await expectAgreement(placed);
-      }
-    },
-  );
+  it.each(
+    SLOTS.flatMap((slot) => blocksOf(slot).map((block) => [`${slot} ${block.variant}`, block] as const)),
+  )('%s, 6 random cases', async (_, block) => {
+    const random = seededRandom(33);
+    for (let index = 0; index < 6; index += 1) {
+      // A driver is loaded by a network, as it is in a line; alone it would feed nothing.
+      const placed = [randomPlaced(block, random)];
+      if (block.slot === 'driver') placed.push(randomPlaced(threeKnob!, random));
+      await expectAgreement(placed);
+    }
+  });
 
   it('100 random circuits of R, C, L, G and E with up to 12 nodes', async () => {
     const random = seededRandom(34);
     let compared = 0;
     while (compared < 100) {
-      const { wiring, values } = randomCircuit(random, 3 + Math.floor(random() * 10), { inductors: true, controlled: true });
+      const { wiring, values } = randomCircuit(random, 3 + Math.floor(random() * 10), {
+        inductors: true,
+        controlled: true,
+      });
       // High resonances and near-cancellations lose SPICE digits; such a circuit says nothing of either.
       if (isTouchy(wiring, values)) continue;
       compared += 1;

@@ -36,23 +36,39 @@ function determinant(matrix: readonly (readonly Poly[])[]): Poly {
     columns.forEach((column, index) => {
       const entry = matrix[row]![column]!;
       if (isZero(entry)) return;
-      const term = multiply(entry, minor(row + 1, columns.filter((other) => other !== column)));
+      const term = multiply(
+        entry,
+        minor(
+          row + 1,
+          columns.filter((other) => other !== column),
+        ),
+      );
       sum = add(sum, index % 2 === 0 ? term : negative(term));
     });
     known.set(key, sum);
     return sum;
   };
-  return minor(0, matrix.map((_, index) => index));
+  return minor(
+    0,
+    matrix.map((_, index) => index),
+  );
 }
 
 /**
  * Numerator and denominator by Cramer's rule on modified nodal equations, every coefficient exact: an
  * independent method (no trees) in an independent arithmetic (no rounding).
  */
-function exactTransfer(wiring: Wiring, values: readonly number[]): { numerator: number[]; denominator: number[] } {
-  const names = [...new Set([...wiring.elements.flatMap((e) => [...e.nodes, ...('control' in e ? e.control : [])]), ...wiring.source, ...wiring.outputs[0]!])].filter(
-    (name) => name !== '0',
-  );
+function exactTransfer(
+  wiring: Wiring,
+  values: readonly number[],
+): { numerator: number[]; denominator: number[] } {
+  const names = [
+    ...new Set([
+      ...wiring.elements.flatMap((e) => [...e.nodes, ...('control' in e ? e.control : [])]),
+      ...wiring.source,
+      ...wiring.outputs[0]!,
+    ]),
+  ].filter((name) => name !== '0');
   const extra = wiring.elements.filter((e) => e.kind === 'inductor' || e.kind === 'voltage-gain').length + 1;
   const size = names.length + extra;
   const matrix: Poly[][] = Array.from({ length: size }, () => Array.from({ length: size }, (): Poly => []));
@@ -84,7 +100,11 @@ function exactTransfer(wiring: Wiring, values: readonly number[]): { numerator: 
       put(row, node(d), [value]);
     } else {
       const admittance: Poly =
-        element.kind === 'resistor' ? [over(fraction(1n), value)] : element.kind === 'capacitor' ? [ZERO, value] : [value];
+        element.kind === 'resistor'
+          ? [over(fraction(1n), value)]
+          : element.kind === 'capacitor'
+            ? [ZERO, value]
+            : [value];
       put(node(a), node(c), admittance);
       put(node(b), node(d), admittance);
       put(node(a), node(d), negative(admittance));
@@ -95,7 +115,11 @@ function exactTransfer(wiring: Wiring, values: readonly number[]): { numerator: 
   const excited = (output: string): Poly => {
     if (output === '0') return [];
     const column = node(output);
-    return determinant(matrix.map((row, index) => row.map((entry, place) => (place === column ? (index === source ? one : []) : entry))));
+    return determinant(
+      matrix.map((row, index) =>
+        row.map((entry, place) => (place === column ? (index === source ? one : []) : entry)),
+      ),
+    );
   };
   const [plusNode, minusNode] = wiring.outputs[0]!;
   const numbers = (poly: Poly): number[] => poly.map(toNumber);
@@ -154,7 +178,16 @@ describe('engine against exact rational arithmetic', () => {
     };
     const between = (low: number, high: number) => low * (high / low) ** random();
     for (let index = 0; index < 40; index += 1) {
-      const values = [between(10, 1000), between(1, 100), between(4, 16), between(1e4, 1e5), between(100, 1e4), between(100, 1e4), between(1e-8, 1e-6), between(1e-6, 1e-5)];
+      const values = [
+        between(10, 1000),
+        between(1, 100),
+        between(4, 16),
+        between(1e4, 1e5),
+        between(100, 1e4),
+        between(100, 1e4),
+        between(1e-8, 1e-6),
+        between(1e-6, 1e-5),
+      ];
       expect(compare(wiring, values)).toBeLessThan(1e-13);
     }
   });

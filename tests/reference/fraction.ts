@@ -29,7 +29,8 @@ export function exactly(value: number): Fraction {
   return fraction(BigInt(scaled), 1n << BigInt(exponent));
 }
 
-export const plus = (a: Fraction, b: Fraction): Fraction => fraction(a.top * b.bottom + b.top * a.bottom, a.bottom * b.bottom);
+export const plus = (a: Fraction, b: Fraction): Fraction =>
+  fraction(a.top * b.bottom + b.top * a.bottom, a.bottom * b.bottom);
 export const times = (a: Fraction, b: Fraction): Fraction => fraction(a.top * b.top, a.bottom * b.bottom);
 export const minus = (a: Fraction): Fraction => ({ top: -a.top, bottom: a.bottom });
 export const over = (a: Fraction, b: Fraction): Fraction => fraction(a.top * b.bottom, a.bottom * b.top);

@@ -15,8 +15,16 @@ const SHORT = 1e-3;
 export function spiceText(wiring: Wiring, values: ArrayLike<number>, sweep: string): string {
   const lines = wiring.elements.map((element, index) => {
     const value = values[index]!;
-    const nodes = [...element.nodes, ...('control' in element ? element.control : [])].map(plainNode).join(' ');
-    const letter = { resistor: 'R', capacitor: 'C', inductor: 'L', transconductance: 'G', 'voltage-gain': 'E' }[element.kind];
+    const nodes = [...element.nodes, ...('control' in element ? element.control : [])]
+      .map(plainNode)
+      .join(' ');
+    const letter = {
+      resistor: 'R',
+      capacitor: 'C',
+      inductor: 'L',
+      transconductance: 'G',
+      'voltage-gain': 'E',
+    }[element.kind];
     const written = element.kind === 'resistor' ? Math.max(value, SHORT) : value;
     return `${letter}${index} ${nodes} ${written.toExponential(16)}`;
   });

@@ -62,7 +62,16 @@ function engine(network: Network): { b: number[]; a: number[] } {
   const { C1, C2, C3, R1, R2, R3, R4, t, m, l } = network;
   const settings: BlockSettings = {
     ...defaultSettings(toneThreeKnob),
-    parts: { ...defaultSettings(toneThreeKnob).parts, trebleCap: C1, bassCap: C2, midCap: C3, treblePot: R1, bassPot: R2, middlePot: R3, slope: R4 },
+    parts: {
+      ...defaultSettings(toneThreeKnob).parts,
+      trebleCap: C1,
+      bassCap: C2,
+      midCap: C3,
+      treblePot: R1,
+      bassPot: R2,
+      middlePot: R3,
+      slope: R4,
+    },
     knobs: { treble: rotation(t), middle: rotation(m), bass: rotation(l) },
     tapers: { treble: LINEAR, middle: LINEAR, bass: LINEAR },
     choices: { middleWiring: 'wiper', load: 'none' },
@@ -87,9 +96,16 @@ describe('three-knob network against the published closed form', () => {
     let worst = 0;
     for (let index = 0; index < 1000; index += 1) {
       const network: Network = {
-        C1: between(50e-12, 5e-9), C2: between(1e-9, 1e-6), C3: between(1e-9, 1e-6),
-        R1: between(50e3, 1e6), R2: between(100e3, 2e6), R3: between(5e3, 100e3), R4: between(10e3, 220e3),
-        t: position(), m: position(), l: position(),
+        C1: between(50e-12, 5e-9),
+        C2: between(1e-9, 1e-6),
+        C3: between(1e-9, 1e-6),
+        R1: between(50e3, 1e6),
+        R2: between(100e3, 2e6),
+        R3: between(5000, 100e3),
+        R4: between(10e3, 220e3),
+        t: position(),
+        m: position(),
+        l: position(),
       };
       const [expected, got] = [closedForm(network), engine(network)];
       for (const side of ['b', 'a'] as const) {

@@ -9,7 +9,10 @@ const target = fileURLToPath(new URL('../../components/bench.png', import.meta.u
 
 const server = await createServer({ configFile, logLevel: 'error', server: { port: 0 } });
 await server.listen();
-const browser = await chromium.launch({ executablePath: await ensureChromium(), args: ['--no-sandbox', '--disable-gpu'] });
+const browser = await chromium.launch({
+  executablePath: await ensureChromium(),
+  args: ['--no-sandbox', '--disable-gpu'],
+});
 const page = await browser.newPage({ viewport: { width: 1280, height: 860 }, colorScheme: 'light' });
 await page.addInitScript(() =>
   localStorage.setItem('notchwork-preferences', JSON.stringify({ hearingNoteRead: true })),

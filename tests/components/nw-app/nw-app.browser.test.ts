@@ -101,7 +101,10 @@ describe('nw-app', () => {
     key(5).click();
     await app.updateComplete;
     expect([tone(app).parts['trebleCap'], steps(app)]).to.deep.equal([560e-12, []]);
-    await waitUntil(() => inside(app, 'nw-swap-panel', '.primary') !== null, 'the value to be shown as tried');
+    await waitUntil(
+      () => inside(app, 'nw-swap-panel', '.primary') !== null,
+      'the value to be shown as tried',
+    );
     key(5).click();
     expect([tone(app).parts['trebleCap'], steps(app)]).to.deep.equal([390e-12, []]);
     await waitUntil(() => inside(app, 'nw-swap-panel', '.primary') === null, 'the value to be put back');
