@@ -39,6 +39,9 @@ export const partsDrawerStyles = css`
     font-weight: 620;
     margin: 0;
     flex: 1;
+  }
+  /* It takes the focus only to be read when the drawer opens. */
+  h2[tabindex]:focus-visible {
     outline: none;
   }
   .inside {

@@ -45,8 +45,8 @@ export class NwPartsDrawer extends LitElement {
   /** Series that the fields step through, by kind of part. */
   @state() private series: Readonly<Partial<Record<PartSpec['kind'], SeriesName>>> = {};
 
-  /** Knob whose midpoint was typed and cannot be used. */
-  @state() private refusedMidpoint: string | undefined;
+  /** Knob whose midpoint was typed and cannot be used, with what was typed. */
+  @state() private refused: { readonly knob: string; readonly typed: string } | undefined;
 
   /** The block shown; undefined while the drawer is closed. */
   @property({ attribute: false }) block: Block | undefined;
@@ -70,7 +70,7 @@ export class NwPartsDrawer extends LitElement {
   }
 
   override willUpdate(changed: PropertyValues<this>): void {
-    if (changed.has('block')) this.refusedMidpoint = undefined;
+    if (changed.has('block')) this.refused = undefined;
   }
 
   override updated(changed: PropertyValues<this>): void {
@@ -97,15 +97,15 @@ export class NwPartsDrawer extends LitElement {
   }
 
   private handleMidpoint(event: Event, knob: string, taper: Taper): void {
-    const share = (event.target as HTMLInputElement).valueAsNumber;
+    const { valueAsNumber: share, value: typed } = event.target as HTMLInputElement;
     const isAccepted = share >= MIDPOINTS.min && share <= MIDPOINTS.max;
-    this.refusedMidpoint = isAccepted ? undefined : knob;
+    this.refused = isAccepted ? undefined : { knob, typed };
     if (isAccepted) this.#setTaper(knob, { ...taper, midpoint: share / 100 });
   }
 
   #setLaw(knob: string, law: Taper['law'], { midpoint }: Taper): void {
     const usable = midpoint < 0.5 ? midpoint : MIDPOINTS.usual / 100;
-    this.refusedMidpoint = undefined;
+    this.refused = undefined;
     this.#setTaper(knob, { law, midpoint: law === 'linear' ? 0.5 : usable });
   }
 
@@ -191,7 +191,7 @@ export class NwPartsDrawer extends LitElement {
   }
 
   #midpoint(knob: string, label: string, taper: Taper): TemplateResult {
-    const isRefused = this.refusedMidpoint === knob;
+    const isRefused = this.refused?.knob === knob;
     const shown = String(Math.round(taper.midpoint * 1000) / 10);
     return html`
       <input
@@ -203,7 +203,7 @@ export class NwPartsDrawer extends LitElement {
         aria-label="${label}: per cent of the track at half turn"
         aria-invalid=${isRefused}
         aria-describedby=${isRefused ? `midpoint-${knob}` : nothing}
-        .value=${isRefused ? nothing : live(shown)}
+        .value=${live(isRefused ? this.refused!.typed : shown)}
         @change=${(event: Event) => this.handleMidpoint(event, knob, taper)}
       />
       <span class="soft" aria-hidden="true">% of the track at half turn</span>

@@ -3,6 +3,7 @@ import { sendKeys } from '@web/test-runner-commands';
 import '../../../components/nw-knob/nw-knob.ts';
 import type { NwKnob } from '../../../components/nw-knob/nw-knob.ts';
 import { expectAccessibleInBothThemes, setTheme } from '../both-themes.ts';
+import { mouse } from '../mouse.ts';
 
 async function knobOf(position = 0.5): Promise<NwKnob> {
   setTheme(undefined);
@@ -37,19 +38,37 @@ function pointer(knob: NwKnob, type: string, clientY: number, more: PointerEvent
 }
 
 describe('nw-knob', () => {
-  beforeEach(() => {
-    // Synthetic events have no active pointer to capture.
+  const capture = HTMLElement.prototype.setPointerCapture;
+  /** Synthetic events have no active pointer to capture; tests with the real mouse do without this. */
+  const withoutCapture = (): void => {
     HTMLElement.prototype.setPointerCapture = () => {};
+  };
+
+  afterEach(() => {
+    HTMLElement.prototype.setPointerCapture = capture;
   });
 
   it('is accessible in both themes', async () => {
     await expectAccessibleInBothThemes(await knobOf());
   });
 
-  it('speaks its position and what it is', async () => {
+  it('is accessible while a number is typed and refused', async () => {
     const knob = await knobOf();
-    expect(dial(knob).getAttribute('aria-valuetext')).to.equal('5.0, 150 kilohms below the wiper');
-    expect(dial(knob).getAttribute('aria-valuenow')).to.equal('5.0');
+    dial(knob).focus();
+    await sendKeys({ press: '4' });
+    await knob.updateComplete;
+    await sendKeys({ type: '7' });
+    await sendKeys({ press: 'Enter' });
+    await knob.updateComplete;
+    expect(knob.shadowRoot!.querySelector('[role=alert]')!.textContent).to.contain('0 to 10');
+    await expectAccessibleInBothThemes(knob);
+  });
+
+  it('speaks what it is and its position, and shows the position in figures', async () => {
+    const knob = await knobOf(0.502);
+    expect(dial(knob).getAttribute('aria-valuetext')).to.equal('150 kilohms below the wiper, 50.2\u202f%');
+    expect(dial(knob).getAttribute('aria-valuenow')).to.equal('5.02');
+    expect(knob.shadowRoot!.querySelector('.value')!.textContent).to.equal('5.0');
   });
 
   for (const [key, expected] of [
@@ -97,7 +116,58 @@ describe('nw-knob', () => {
     expect([knob.position, told]).to.deep.equal([1, []]);
   });
 
-  it('follows a drag up, beyond its edge too, and settles once', async () => {
+  it('settles once for a key held down', async () => {
+    const knob = await knobOf();
+    const told = record(knob);
+    dial(knob).focus();
+    for (const repeat of [false, true, true]) {
+      dial(knob).dispatchEvent(new KeyboardEvent('keydown', { key: 'ArrowUp', repeat, cancelable: true }));
+    }
+    dial(knob).dispatchEvent(new KeyboardEvent('keyup', { key: 'ArrowUp' }));
+    expect(told).to.deep.equal(['input 0.51', 'input 0.52', 'input 0.53', 'change 0.53']);
+  });
+
+  it('settles when the focus goes away under a key held down', async () => {
+    const knob = await knobOf();
+    const told = record(knob);
+    dial(knob).focus();
+    dial(knob).dispatchEvent(new KeyboardEvent('keydown', { key: 'ArrowUp', cancelable: true }));
+    dial(knob).blur();
+    expect(told).to.deep.equal(['input 0.51', 'change 0.51']);
+  });
+
+  it('follows the real mouse beyond its edge and settles when it is let go there', async () => {
+    const knob = await knobOf();
+    const told = record(knob);
+    const { left, top, width, height } = dial(knob).getBoundingClientRect();
+    const [x, y] = [Math.round(left + width / 2), Math.round(top + height / 2)];
+    await mouse.move(x, y);
+    await mouse.down();
+    await mouse.move(x + 300, y + 45);
+    await mouse.up();
+    // 180 pixels are the whole range.
+    expect(knob.position).to.be.closeTo(0.25, 1e-9);
+    expect(told.at(-1)).to.equal('change 0.25');
+    await mouse.move(x, y);
+    expect(knob.position).to.be.closeTo(0.25, 1e-9);
+  });
+
+  it('puts the real mouse’s drag back on Escape, and then lets the mouse be', async () => {
+    const knob = await knobOf();
+    const told = record(knob);
+    const { left, top, width, height } = dial(knob).getBoundingClientRect();
+    await mouse.move(left + width / 2, top + height / 2);
+    await mouse.down();
+    await mouse.move(left + width / 2, top + height / 2 + 36);
+    await sendKeys({ press: 'Escape' });
+    await mouse.move(left + width / 2, top + height / 2 + 90);
+    await mouse.up();
+    expect(knob.position).to.equal(0.5);
+    expect(told.at(-1)).to.equal('change 0.5');
+  });
+
+  it('follows a drag up and settles once', async () => {
+    withoutCapture();
     const knob = await knobOf();
     const told = record(knob);
     pointer(knob, 'pointerdown', 200);
@@ -107,7 +177,21 @@ describe('nw-knob', () => {
     expect(told).to.deep.equal(['input 0.6', 'input 0.7', 'change 0.7']);
   });
 
+  it('settles even where the drag ends where it began, and follows one finger at a time', async () => {
+    withoutCapture();
+    const knob = await knobOf();
+    const told = record(knob);
+    pointer(knob, 'pointerdown', 200);
+    pointer(knob, 'pointermove', 182);
+    pointer(knob, 'pointerdown', 100, { pointerId: 2 });
+    pointer(knob, 'pointermove', 0, { pointerId: 2 });
+    pointer(knob, 'pointermove', 200);
+    pointer(knob, 'pointerup', 200);
+    expect(told).to.deep.equal(['input 0.6', 'input 0.5', 'change 0.5']);
+  });
+
   it('drags finely with Shift, without a jump when Shift is pressed on the way', async () => {
+    withoutCapture();
     const knob = await knobOf();
     pointer(knob, 'pointerdown', 200);
     pointer(knob, 'pointermove', 182);
@@ -115,8 +199,9 @@ describe('nw-knob', () => {
     expect(knob.position).to.be.closeTo(0.61, 1e-9);
   });
 
-  it('goes back to where it was when the drag is cancelled or Escape is pressed', async () => {
-    for (const end of ['pointercancel', 'Escape']) {
+  it('goes back to where it was when the drag is cancelled, the capture lost or Escape pressed', async () => {
+    withoutCapture();
+    for (const end of ['pointercancel', 'lostpointercapture', 'Escape']) {
       const knob = await knobOf();
       pointer(knob, 'pointerdown', 200);
       pointer(knob, 'pointermove', 100);
@@ -149,6 +234,50 @@ describe('nw-knob', () => {
     expect(told).to.deep.equal(['input 0.51', 'input 0.52', 'change 0.52']);
   });
 
+  it('takes many small scrolls of a touchpad as one step, and leaves zooming alone', async () => {
+    const knob = await knobOf();
+    dial(knob).focus();
+    for (let count = 0; count < 5; count += 1) {
+      dial(knob).dispatchEvent(new WheelEvent('wheel', { deltaY: 7, cancelable: true }));
+    }
+    expect(knob.position).to.be.closeTo(0.49, 1e-9);
+    const zoom = new WheelEvent('wheel', { deltaY: 100, ctrlKey: true, cancelable: true });
+    dial(knob).dispatchEvent(zoom);
+    expect([zoom.defaultPrevented, knob.position]).to.deep.equal([false, 0.49]);
+  });
+
+  it('takes a typed share in per cent, and refuses what is beyond the dial', async () => {
+    const knob = await knobOf();
+    dial(knob).focus();
+    await sendKeys({ press: '4' });
+    await knob.updateComplete;
+    await sendKeys({ type: '7' });
+    await sendKeys({ press: 'Enter' });
+    await knob.updateComplete;
+    expect(knob.position).to.equal(0.5);
+    expect(knob.shadowRoot!.querySelector<HTMLInputElement>('.entry')!.value).to.equal('47');
+    await sendKeys({ type: '%' });
+    await sendKeys({ press: 'Enter' });
+    await knob.updateComplete;
+    expect(knob.position).to.equal(0.47);
+    expect(knob.shadowRoot!.activeElement).to.equal(dial(knob));
+  });
+
+  it('takes a readable entry when the focus leaves it, and drops nonsense', async () => {
+    const knob = await knobOf();
+    for (const [text, expected] of [
+      ['3', 0.3],
+      ['.', 0.3],
+    ] as const) {
+      dial(knob).focus();
+      await sendKeys({ press: text });
+      await knob.updateComplete;
+      knob.shadowRoot!.querySelector<HTMLInputElement>('.entry')!.blur();
+      await knob.updateComplete;
+      expect([knob.position, knob.shadowRoot!.querySelector('.entry')]).to.deep.equal([expected, null]);
+    }
+  });
+
   it('is set by typing a number; Escape and nonsense leave it', async () => {
     const knob = await knobOf();
     const told = record(knob);
@@ -174,7 +303,7 @@ describe('nw-knob', () => {
     knob.position = 0.9;
     await knob.updateComplete;
     expect(told).to.deep.equal([]);
-    expect(dial(knob).getAttribute('aria-valuenow')).to.equal('9.0');
+    expect(dial(knob).getAttribute('aria-valuenow')).to.equal('9');
   });
 
   it('is large enough for a finger and works after being moved in the page', async () => {
@@ -182,7 +311,12 @@ describe('nw-knob', () => {
     const { width, height } = dial(knob).getBoundingClientRect();
     expect(Math.min(width, height)).to.be.at.least(44);
     const parent = knob.parentElement!;
+    const told = record(knob);
+    dial(knob).focus();
+    dial(knob).dispatchEvent(new KeyboardEvent('keydown', { key: 'ArrowDown', cancelable: true }));
     knob.remove();
+    expect(told, 'a move that was under way is settled').to.deep.equal(['input 0.49', 'change 0.49']);
+    knob.position = 0.5;
     parent.append(knob);
     dial(knob).focus();
     await sendKeys({ press: 'ArrowUp' });

@@ -44,6 +44,31 @@ describe('nw-menu', () => {
     expect(focused(menu)).to.equal('Four');
   });
 
+  it('opens by the arrow keys from either end', async () => {
+    for (const [key, expected] of [
+      ['ArrowDown', 'One'],
+      ['ArrowUp', 'Four'],
+    ] as const) {
+      const menu = await make();
+      button(menu).focus();
+      await sendKeys({ press: key });
+      await menu.updateComplete;
+      expect(focused(menu), key).to.equal(expected);
+    }
+  });
+
+  it('is closed after being moved in the page, and opens again', async () => {
+    const menu = await make();
+    await open(menu);
+    const parent = menu.parentElement!;
+    menu.remove();
+    parent.append(menu);
+    await menu.updateComplete;
+    expect(button(menu).getAttribute('aria-expanded')).to.equal('false');
+    await open(menu);
+    expect(focused(menu)).to.equal('One');
+  });
+
   it('tells what was chosen, closes, and gives the focus back', async () => {
     const menu = await make();
     let chosen = '';

@@ -20,8 +20,8 @@ describe('nw-notice', () => {
       (await make(kind)).shadowRoot!.querySelector('.box')!.getAttribute('role');
     expect([await role('error'), await role('caution'), await role('info')]).to.deep.equal([
       'alert',
-      'note',
-      'note',
+      'status',
+      'status',
     ]);
   });
 

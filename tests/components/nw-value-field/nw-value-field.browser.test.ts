@@ -82,8 +82,78 @@ describe('nw-value-field', () => {
     const field = await fieldOf(1e-6);
     field.shadowRoot!.querySelectorAll('button')[1]!.click();
     await field.updateComplete;
-    expect(message(field)).to.match(/end/);
+    expect(message(field)).to.match(
+      /1\u202fpF to 1\u202fµF is accepted; the next value in E12 would be 1\.2\u202fµF/,
+    );
     expect(field.value).to.equal(1e-6);
+  });
+
+  it('steps a decade with the Page keys, whatever the series', async () => {
+    const field = await fieldOf();
+    field.series = 'E24';
+    await field.updateComplete;
+    field.focus();
+    await sendKeys({ press: 'PageUp' });
+    expect(field.value).to.equal(3.9e-9);
+    await sendKeys({ press: 'PageDown' });
+    expect(field.value).to.equal(390e-12);
+  });
+
+  it('steps from what was just typed', async () => {
+    const field = await fieldOf();
+    const told = record(field);
+    field.focus();
+    input(field).value = '';
+    await sendKeys({ type: '10n' });
+    await sendKeys({ press: 'ArrowUp' });
+    expect(told).to.deep.equal([12e-9]);
+  });
+
+  it('steps to nothing and back where nothing is accepted', async () => {
+    const field = await fixture<NwValueField>(
+      html`<nw-value-field label="Stopper" unit="Ω" .range=${[0, 1e6]} .value=${1}></nw-value-field>`,
+    );
+    field.focus();
+    await sendKeys({ press: 'ArrowDown' });
+    expect(field.value).to.equal(0);
+    await sendKeys({ press: 'ArrowUp' });
+    expect(field.value).to.equal(1);
+  });
+
+  it('offers the series where it is asked to, tells of it and steps through the new one', async () => {
+    const field = await fieldOf();
+    expect(field.shadowRoot!.querySelector('select')).to.equal(null);
+    field.seriesChoice = true;
+    await field.updateComplete;
+    await expectAccessibleInBothThemes(field);
+    const told: string[] = [];
+    const changes = record(field);
+    field.addEventListener('nw-series-set', (event) => told.push(event.detail.series));
+    const select = field.shadowRoot!.querySelector('select')!;
+    expect([...select.options].map((option) => option.value)).to.include.members([
+      'E6',
+      'E12',
+      'E24',
+      'E48',
+      'E96',
+      'E192',
+    ]);
+    expect(select.value).to.equal('E12');
+    select.value = 'E96';
+    select.dispatchEvent(new Event('change', { bubbles: true }));
+    field.focus();
+    await sendKeys({ press: 'ArrowUp' });
+    // 392 is the member of E96 after 390 (IEC 60063).
+    expect([told, changes]).to.deep.equal([['E96'], [392e-12]]);
+  });
+
+  it('works after being moved in the page', async () => {
+    const field = await fieldOf();
+    const parent = field.parentElement!;
+    field.remove();
+    parent.append(field);
+    await enter(field, '1n');
+    expect(field.value).to.equal(1e-9);
   });
 
   it('forgets what was typed on Escape', async () => {
