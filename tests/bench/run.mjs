@@ -1,5 +1,4 @@
-import { mkdtempSync, readdirSync, rmSync } from 'node:fs';
-import { tmpdir } from 'node:os';
+import { mkdirSync, mkdtempSync, readdirSync, rmSync } from 'node:fs';
 import { join } from 'node:path';
 import { fileURLToPath, pathToFileURL } from 'node:url';
 import { build } from 'esbuild';
@@ -15,7 +14,10 @@ const files = readdirSync(here)
   .filter((file) => file.endsWith('.bench.ts'))
   .filter((file) => wanted.length === 0 || wanted.some((word) => file.includes(word)))
   .sort();
-const scratch = mkdtempSync(join(tmpdir(), 'notchwork-bench-'));
+// Inside node_modules, so that packages left out of a bundle are found.
+const cache = fileURLToPath(new URL('../../node_modules/.cache/', import.meta.url));
+mkdirSync(cache, { recursive: true });
+const scratch = mkdtempSync(join(cache, 'notchwork-bench-'));
 
 /** Bundles one benchmark and measures its rows; each file gets modules of its own, so none warms another's. */
 async function measure(file) {
@@ -27,6 +29,7 @@ async function measure(file) {
     platform: 'node',
     format: 'esm',
     target: 'node20',
+    packages: 'external',
     logLevel: 'error',
   });
   const { rows } = await import(pathToFileURL(outfile).href);
