@@ -288,6 +288,8 @@ export class NwApp extends LitElement {
     const { preferences, rendering, design } = this.#design.value;
     const gain = gains.find((entry) => entry.letter === design.active)?.gain;
     return html`<nw-play-bar
+      @pointerover=${() => this.bench.sound.prepare()}
+      @focusin=${() => this.bench.sound.prepare()}
       .playing=${playing}
       .clipTitle=${clip?.title ?? ''}
       .clips=${DEMO_CLIPS.map(({ id, title, description }) => ({ id, label: title, note: description }))}

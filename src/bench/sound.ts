@@ -207,6 +207,14 @@ export class BenchSound {
     engine.setRegion(this.#region.peek());
   }
 
+  /**
+   * Loads the audio code ahead of the press that needs it: some browsers forget the user's click while
+   * code is still on its way, and then refuse to start sound.
+   */
+  prepare(): void {
+    void import('../audio/engine.ts').catch(() => {}); // pressing play tries again and says what is wrong
+  }
+
   /** Plays or stops. Call it in the user's own click or key press: browsers start sound only there. */
   async toggle(): Promise<void> {
     if (this.playing.peek()) {
