@@ -65,7 +65,7 @@ export interface Engine {
   /**
    * Plays from the present place, inside the region. Call it in the user's own click.
    *
-   * @throws NotchworkError `audio-unavailable` when the browser does not let sound start in 2 s;
+   * @throws NotchworkError `audio-unavailable` when the browser does not let sound start in 5 s;
    *   `clip-empty` without a clip.
    */
   play(): Promise<void>;
