@@ -1,6 +1,8 @@
 import { css } from 'lit';
 
-/** Styles of `nw-block`. */
+/**
+ * Styles of `nw-block`. Out of the line, name and switch lie on the rail, which runs on behind them.
+ */
 export const blockStyles = css`
   :host {
     display: block;
@@ -103,7 +105,6 @@ export const blockStyles = css`
   :host(:not([present])) .head {
     gap: 16px;
   }
-  /* Out of the line, name and switch lie on the rail, which runs on behind them. */
   :host(:not([present])) :is(.name, nw-switch) {
     background: var(--nw-paper);
     min-height: 44px;

@@ -14,6 +14,7 @@ export const knobStyles = css`
   }
   .stage {
     position: relative;
+    margin-block: 1px 3px;
   }
   .dial {
     position: relative;

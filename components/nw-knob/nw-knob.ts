@@ -303,7 +303,7 @@ export class NwKnob extends LitElement {
       </div>
       ${
         this.refused
-          ? html`<span class="readout refused" id="accepted" role="alert">0 to 10, or 0 to 100 %</span>`
+          ? html`<span class="readout refused" id="accepted" role="alert">0 to 10</span>`
           : html`<span class="readout" aria-hidden="true">${this.readout}</span>`
       }
     `;

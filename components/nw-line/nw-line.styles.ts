@@ -1,6 +1,12 @@
 import { css } from 'lit';
 
-/** Styles of `nw-line`. */
+/**
+ * Styles of `nw-line`.
+ *
+ * Blocks out of the line that lead it have a row of their own, so that the others stay large. The
+ * piece of rail that leads to a block, with its arrow head, hangs out before the block: what hangs out
+ * at the start of a row never makes a page wider, as it would at the end.
+ */
 export const lineStyles = css`
   :host {
     display: block;
@@ -24,7 +30,6 @@ export const lineStyles = css`
     flex: 0 0 auto;
     background: linear-gradient(var(--rail), var(--rail)) 0 22px / 100% 1px no-repeat;
   }
-  /* Blocks out of the line that lead it have a row of their own, so that the others stay large. */
   li.in,
   li.in ~ li {
     order: 2;
@@ -37,10 +42,6 @@ export const lineStyles = css`
   li.out:not(li.in ~ li) {
     margin-block-end: -12px;
   }
-  /*
-   * The piece of rail that leads to a block, with its arrow head. It hangs out before the block: what
-   * hangs out at the start of a row never makes a page wider, as it would at the end.
-   */
   li + li::after {
     content: '';
     position: absolute;

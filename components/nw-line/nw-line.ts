@@ -1,6 +1,5 @@
 import { html, LitElement, type TemplateResult } from 'lit';
 import { customElement, property } from 'lit/decorators.js';
-import { repeat } from 'lit/directives/repeat.js';
 import type { Block, BlockSettings, SlotName } from '../../src/blocks/block.ts';
 import type { PlacedBlock } from '../../src/blocks/span.ts';
 import { formatValue } from '../../src/parts/value-text.ts';
@@ -69,11 +68,7 @@ export class NwLine extends LitElement {
   override render(): TemplateResult {
     return html`
       <ol class="rail" aria-label="The line, in the order of the signal">
-        ${repeat(
-          this.entries,
-          ({ block }) => block.slot,
-          (entry) => this.#entry(entry),
-        )}
+        ${this.entries.map((entry) => this.#entry(entry))}
       </ol>
     `;
   }

@@ -1,6 +1,6 @@
 import { css } from 'lit';
 
-/** Styles of `nw-parts-drawer`. */
+/** Styles of `nw-parts-drawer`. Its heading takes the focus only to be read when the drawer opens. */
 export const partsDrawerStyles = css`
   dialog {
     width: min(760px, 100%);
@@ -40,7 +40,6 @@ export const partsDrawerStyles = css`
     margin: 0;
     flex: 1;
   }
-  /* It takes the focus only to be read when the drawer opens. */
   h2[tabindex]:focus-visible {
     outline: none;
   }

@@ -4,7 +4,9 @@ import { css } from 'lit';
 export const valueFieldStyles = css`
   :host {
     display: inline-grid;
+    grid-template-columns: minmax(0, auto);
     min-width: 0;
+    max-width: 100%;
   }
   .row {
     display: flex;
