@@ -2,17 +2,23 @@ import { NotchworkError } from '../errors.ts';
 import type { Volts, Watts } from '../units.ts';
 
 /** Kinds of part with a rating that builders look for. */
-export type RatedKind = 'film-capacitor' | 'ceramic-capacitor' | 'electrolytic-capacitor' | 'resistor';
+export type RatedKind =
+  | 'film-capacitor'
+  | 'ceramic-capacitor'
+  | 'electrolytic-capacitor'
+  | 'resistor'
+  | 'potentiometer';
 
 /**
  * Ratings usually on sale, ascending: DC working voltages of capacitors in volts, dissipations of
- * resistors in watts at the maker's stated ambient. Common practice, no source.
+ * resistors and of whole potentiometer tracks in watts at the maker's stated ambient. Common practice, no source.
  */
 export const USUAL_RATINGS: Readonly<Record<RatedKind, readonly number[]>> = {
   'film-capacitor': [63, 100, 160, 250, 400, 630, 1000, 1600, 2000],
   'ceramic-capacitor': [50, 100, 200, 500, 1000, 2000, 3000],
   'electrolytic-capacitor': [6.3, 10, 16, 25, 35, 50, 63, 100, 160, 200, 250, 350, 400, 450, 500],
   resistor: [0.125, 0.25, 0.5, 1, 2, 3, 5, 7, 10, 15, 25, 50],
+  potentiometer: [0.1, 0.25, 0.5, 1, 2],
 };
 
 /**
@@ -24,6 +30,7 @@ export const USUAL_MARGIN: Readonly<Record<RatedKind, number>> = {
   'ceramic-capacitor': 0.25,
   'electrolytic-capacitor': 0.1,
   resistor: 1,
+  potentiometer: 1,
 };
 
 /** Largest continuous voltage across a resistor body, by its power rating in watts. Common practice, no source. */
