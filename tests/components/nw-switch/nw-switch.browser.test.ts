@@ -1,5 +1,5 @@
 import { expect, fixture, html } from '@open-wc/testing';
-import { sendKeys } from '@web/test-runner-commands';
+import { emulateMedia, sendKeys } from '@web/test-runner-commands';
 import '../../../components/nw-switch/nw-switch.ts';
 import type { NwSwitch } from '../../../components/nw-switch/nw-switch.ts';
 import { expectAccessibleInBothThemes, setTheme } from '../both-themes.ts';
@@ -33,5 +33,43 @@ describe('nw-switch', () => {
     element.checked = true;
     await element.updateComplete;
     expect([told, element.shadowRoot!.querySelector('input')!.checked]).to.deep.equal([0, true]);
+  });
+
+  it('moves at once for people who want less motion', async () => {
+    try {
+      for (const [reducedMotion, expected] of [
+        ['no-preference', '0.12s'],
+        ['reduce', '0s'],
+      ] as const) {
+        await emulateMedia({ reducedMotion });
+        const input = (await make()).shadowRoot!.querySelector('input')!;
+        expect(getComputedStyle(input, '::after').transitionDuration, reducedMotion).to.equal(expected);
+      }
+    } finally {
+      await emulateMedia({ reducedMotion: 'no-preference' });
+    }
+  });
+
+  it('moves its thumb to the other side where the text runs from right to left', async () => {
+    const element = await make();
+    element.style.direction = 'rtl';
+    element.checked = true;
+    await element.updateComplete;
+    const input = element.shadowRoot!.querySelector('input')!;
+    await Promise.all(input.getAnimations({ subtree: true }).map((animation) => animation.finished));
+    expect(getComputedStyle(input, '::after').left).to.equal('2px');
+  });
+
+  it('works after being moved in the page', async () => {
+    const element = await make();
+    const parent = element.parentElement!;
+    element.remove();
+    parent.append(element);
+    let told = 0;
+    element.addEventListener('change', () => {
+      told += 1;
+    });
+    element.shadowRoot!.querySelector('input')!.click();
+    expect([told, element.checked]).to.deep.equal([1, true]);
   });
 });
