@@ -2,6 +2,7 @@ import { DEMO_CLIPS } from '../../demo-audio/clips.ts';
 import type { Bench } from '../../src/bench/bench.ts';
 import { loadFiltering } from '../../src/bench/filtering.ts';
 import type { PageKey } from '../../src/bench/keyboard.ts';
+import { browserStorage } from '../../src/bench/preferences.ts';
 import type { SwapSession } from '../../src/bench/swap-session.ts';
 import {
   setChoice,
@@ -173,8 +174,33 @@ export class AppActions {
     }
   }
 
-  /** Takes a recording of the user's own. */
+  /** Puts the design kept in this browser back on the bench, and keeps it from then on. */
+  async keepDesign(): Promise<() => void> {
+    const { keepDesign, restoreDesign } = await import('../../src/bench/design-keeper.ts');
+    const storage = browserStorage();
+    const { store, sound } = this.#bench;
+    const restored = store.history.peek().past.length === 0 ? restoreDesign(store, storage) : 'none';
+    if (typeof restored === 'object') sound.say({ kind: 'error', text: restored.problem });
+    return keepDesign(store, storage, (text) => sound.say({ kind: 'caution', text }));
+  }
+
+  async #openDesign(file: File): Promise<void> {
+    try {
+      const { readDesign } = await import('../../src/design/read-design.ts');
+      const design = readDesign(await file.text());
+      this.#swap.end();
+      this.#bench.store.apply(() => design, `opening “${design.title}”`);
+    } catch (error) {
+      this.#bench.sound.say({ kind: 'error', text: `${file.name}: ${messageOf(error)}` });
+    }
+  }
+
+  /** Takes a design (.json) or a recording of the user's own. */
   openFile(file: File): void {
+    if (/\.json$/i.test(file.name)) {
+      void this.#openDesign(file);
+      return;
+    }
     void this.#bench.sound.open(file, file.name.replace(/\.[^.]+$/, ''));
   }
 }

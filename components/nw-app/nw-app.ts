@@ -1,6 +1,6 @@
 import { signal } from '@preact/signals-core';
 import { html, LitElement, nothing, type TemplateResult } from 'lit';
-import { customElement, state } from 'lit/decorators.js';
+import { customElement, query, state } from 'lit/decorators.js';
 import { DEMO_CLIPS } from '../../demo-audio/clips.ts';
 import { type Bench, createBench } from '../../src/bench/bench.ts';
 import type { ExportKind, RenderProgress } from '../../src/bench/bench-exports.ts';
@@ -39,7 +39,11 @@ const TABS: readonly Tab[] = [
   { id: 'swap', label: 'Swap' },
 ];
 
-const EXPORTS: readonly MenuItem[] = [
+const OPEN_DESIGN = 'open-design';
+
+const FILES: readonly MenuItem[] = [
+  { id: OPEN_DESIGN, label: 'Open a design…', note: 'or drop one on the page' },
+  { id: 'design', label: 'Save the design', note: 'all voicings, as a JSON file' },
   { id: 'csv', label: 'Curve as CSV', note: 'level, phase and the digital filter' },
   { id: 'svg', label: 'Plot as SVG', note: 'vectors on white, for paper' },
   { id: 'png', label: 'Plot as PNG' },
@@ -69,6 +73,8 @@ export class NwApp extends LitElement {
 
   /** The bench on this page; it lives as long as the element. */
   readonly bench: Bench = createBench();
+
+  @query('input[type=file]') private designField!: HTMLInputElement;
 
   @state() private tab = 'listen';
 
@@ -107,6 +113,7 @@ export class NwApp extends LitElement {
     };
   });
   #frame: number | undefined;
+  #keeping: Promise<() => void> | undefined;
 
   override connectedCallback(): void {
     super.connectedCallback();
@@ -118,6 +125,7 @@ export class NwApp extends LitElement {
     window.addEventListener('drop', this.#handleDrop);
     this.#watchMeter();
     setTimeout(() => this.#loadTheRest(), 0);
+    this.#keeping = this.#actions.keepDesign();
     if (this.bench.sound.clip.peek() === undefined) this.#actions.chooseClip(DEMO_CLIPS[0]!.id);
   }
 
@@ -129,6 +137,8 @@ export class NwApp extends LitElement {
     window.removeEventListener('drop', this.#handleDrop);
     if (this.#frame !== undefined) cancelAnimationFrame(this.#frame);
     this.#frame = undefined;
+    void this.#keeping?.then((stop) => stop());
+    this.#keeping = undefined;
   }
 
   override updated(): void {
@@ -149,6 +159,17 @@ export class NwApp extends LitElement {
       sampleRate: this.bench.sound.sampleRate.value,
       filtering: filtering.value,
     });
+  }
+
+  #file(id: string): void {
+    if (id === OPEN_DESIGN) this.designField.click();
+    else void this.#save(id as ExportKind);
+  }
+
+  private handleDesignFile(): void {
+    const file = this.designField.files?.[0];
+    this.designField.value = ''; // so that the same file can be opened again
+    if (file !== undefined) this.#actions.openFile(file);
   }
 
   async #save(kind: ExportKind): Promise<void> {
@@ -342,10 +363,11 @@ export class NwApp extends LitElement {
         .theme=${preferences.theme}
       >
         <nw-menu
-          label="Save a copy"
-          .items=${EXPORTS}
-          @nw-choose=${(event: CustomEvent<{ id: string }>) => this.#save(event.detail.id as ExportKind)}
+          label="Files"
+          .items=${FILES}
+          @nw-choose=${(event: CustomEvent<{ id: string }>) => this.#file(event.detail.id)}
         ></nw-menu>
+        <input type="file" hidden accept=".json,application/json" @change=${this.handleDesignFile} />
       </nw-header>
       <div class="middle ${this.dropping ? 'dropping' : ''}">
         <main>

@@ -6,7 +6,7 @@ import type { Bench } from './bench.ts';
 import { saveFile } from './save-file.ts';
 
 /** What can leave the bench. */
-export type ExportKind = 'csv' | 'png' | 'svg' | 'wav24' | 'wav32';
+export type ExportKind = 'design' | 'csv' | 'png' | 'svg' | 'wav24' | 'wav32';
 
 /** A rendering that is under way. */
 export interface RenderProgress {
@@ -45,13 +45,19 @@ export class BenchExports {
   /** Saves one thing; what goes wrong is said beside the sound. */
   async save(kind: ExportKind): Promise<void> {
     try {
-      if (kind === 'csv') await this.#saveCsv();
+      if (kind === 'design') await this.#saveDesign();
+      else if (kind === 'csv') await this.#saveCsv();
       else if (kind === 'png' || kind === 'svg') await this.#savePlot(kind);
       else await this.#saveWav(kind === 'wav24' ? 24 : 32);
     } catch (error) {
       if (error instanceof DOMException && error.name === 'AbortError') return;
       this.#bench.sound.say({ kind: 'error', text: messageOf(error) });
     }
+  }
+
+  async #saveDesign(): Promise<void> {
+    const { writeDesign } = await import('../design/read-design.ts');
+    saveFile(writeDesign(this.#bench.store.design.peek()), this.#name('', 'json'), 'application/json');
   }
 
   async #saveCsv(): Promise<void> {

@@ -91,8 +91,8 @@ describe.each(browsers)('the main job in %s', (_, open) => {
       );
 
       const values = { treble: 0.88, trebleCap: 560e-12, presence: 0.4 };
-      await driver.click('nw-app', 'nw-menu=>Save a copy', 'button');
-      await driver.click('nw-app', 'nw-menu=>Save a copy', '.item=>Curve as CSV');
+      await driver.click('nw-app', 'nw-menu=>Files', 'button');
+      await driver.click('nw-app', 'nw-menu=>Files', '.item=>Curve as CSV');
       const csv = await driver.saved('.csv');
       const table = Papa.parse<Record<string, string>>(new TextDecoder().decode(csv.bytes).trimEnd(), {
         header: true,
@@ -106,8 +106,8 @@ describe.each(browsers)('the main job in %s', (_, open) => {
         expect(turned - 360 * Math.round(turned / 360)).toBeCloseTo(0, 7);
       }
 
-      await driver.click('nw-app', 'nw-menu=>Save a copy', 'button');
-      await driver.click('nw-app', 'nw-menu=>Save a copy', '.item=>float WAV');
+      await driver.click('nw-app', 'nw-menu=>Files', 'button');
+      await driver.click('nw-app', 'nw-menu=>Files', '.item=>float WAV');
       const rendered = readWav((await driver.saved('.wav')).bytes);
       expect(rendered.frames).toBeGreaterThanOrEqual(clip.frames);
       const expected = renderByHand(clip.channels[0]!, 48_000, values);

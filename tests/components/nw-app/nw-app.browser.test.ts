@@ -222,6 +222,27 @@ describe('nw-app', () => {
     await waitUntil(() => app.bench.sound.gain.value === undefined);
   });
 
+  it('brings back the design when the page is opened again', async () => {
+    const app = await make();
+    inside<HTMLElement>(block(app, 'tone'), 'nw-knob').focus();
+    await sendKeys({ press: 'PageUp' });
+    await waitUntil(() => localStorage.getItem('notchwork-design') !== null, 'the design to be kept');
+    app.remove();
+    const again = await fixture<NwApp>(html`<nw-app></nw-app>`);
+    await waitUntil(() => tone(again).knobs['treble'] === 0.7, 'the design to come back');
+  });
+
+  it('opens a design that is dropped, as one step; refuses a broken one and says why', async () => {
+    const app = await make();
+    const text = JSON.stringify({ ...app.bench.store.design.value, title: 'From a file' });
+    drop('loft.json', new TextEncoder().encode(text) as Uint8Array<ArrayBuffer>);
+    await waitUntil(() => app.bench.store.design.value.title === 'From a file', 'the design');
+    expect(steps(app)).to.deep.equal(['opening “From a file”']);
+    drop('broken.json', new TextEncoder().encode('{') as Uint8Array<ArrayBuffer>);
+    await waitUntil(() => message(app).includes('broken.json'), 'a message');
+    expect(app.bench.store.design.value.title).to.equal('From a file');
+  });
+
   it('refuses a region without length', async () => {
     const app = await make();
     app.bench.sound.setRegion(2, 2, true);
