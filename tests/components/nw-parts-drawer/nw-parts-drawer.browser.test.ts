@@ -167,14 +167,16 @@ describe('nw-parts-drawer', () => {
     slope.value = '';
     await sendKeys({ type: 'abc' });
     await sendKeys({ press: 'Enter' });
-    drawer.block = toneJames;
-    drawer.settings = defaultSettings(toneJames);
+    // Same parts, same values: only the circuit's name tells them apart.
+    const twin: Block = { ...toneThreeKnob, variant: 'twin', title: 'Twin' };
+    drawer.variants = [toneThreeKnob, twin];
+    drawer.block = twin;
     await drawer.updateComplete;
     const shown = all<NwValueField>(drawer, 'nw-value-field').map(
       (entry) => entry.shadowRoot!.querySelector('input')!.value,
     );
     expect(shown).not.to.include('abc');
-    expect(all<HTMLSelectElement>(drawer, '.choices select')[0]!.value).to.equal('james');
+    expect(all<HTMLSelectElement>(drawer, '.choices select')[0]!.value).to.equal('twin');
   });
 
   it('opens with its heading in focus, the rest of the page out of reach', async () => {

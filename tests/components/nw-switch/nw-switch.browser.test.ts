@@ -53,9 +53,10 @@ describe('nw-switch', () => {
   it('moves its thumb to the other side where the text runs from right to left', async () => {
     const element = await make();
     element.style.direction = 'rtl';
+    const input = element.shadowRoot!.querySelector('input')!;
+    expect(getComputedStyle(input, '::after').left).to.equal('14px');
     element.checked = true;
     await element.updateComplete;
-    const input = element.shadowRoot!.querySelector('input')!;
     await Promise.all(input.getAnimations({ subtree: true }).map((animation) => animation.finished));
     expect(getComputedStyle(input, '::after').left).to.equal('2px');
   });
