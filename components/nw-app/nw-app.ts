@@ -20,7 +20,6 @@ import { SignalReader } from '../controllers/signal-reader.ts';
 import '../nw-header/nw-header.ts';
 import '../nw-line/nw-line.ts';
 import type { LineEntry } from '../nw-line/nw-line.ts';
-import '../nw-listen-panel/nw-listen-panel.ts';
 import '../nw-menu/nw-menu.ts';
 import type { MenuItem } from '../nw-menu/nw-menu.ts';
 import '../nw-notice/nw-notice.ts';
@@ -196,6 +195,7 @@ export class NwApp extends LitElement {
 
   /** Elements that the first screen does not show come after it. */
   #loadTheRest(): void {
+    void import('../nw-listen-panel/nw-listen-panel.ts');
     void import('../nw-parts-drawer/nw-parts-drawer.ts');
     void import('../nw-swap-panel/nw-swap-panel.ts');
   }
@@ -352,7 +352,11 @@ export class NwApp extends LitElement {
     const { design, history, preferences, swap } = this.#design.value;
     const { line } = this.bench.store.voicing.value;
     const entries = SLOTS.map(
-      (slot): LineEntry => ({ ...placedBlock(slot, line[slot]), present: line[slot].present }),
+      (slot): LineEntry => ({
+        ...placedBlock(slot, line[slot]),
+        present: line[slot].present,
+        variants: blocksOf(slot),
+      }),
     );
     return html`
       <nw-header

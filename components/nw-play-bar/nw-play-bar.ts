@@ -9,7 +9,6 @@ import '../nw-menu/nw-menu.ts';
 import type { MenuItem } from '../nw-menu/nw-menu.ts';
 import '../nw-notice/nw-notice.ts';
 import { timeText } from '../nw-waveform/clip-time.ts';
-import '../nw-waveform/nw-waveform.ts';
 import { baseStyles } from '../theme.ts';
 import { playBarStyles } from './nw-play-bar.styles.ts';
 
@@ -122,6 +121,11 @@ export class NwPlayBar extends LitElement {
   override disconnectedCallback(): void {
     super.disconnectedCallback();
     this.#widthObserver.disconnect();
+  }
+
+  override firstUpdated(): void {
+    // The waveform has nothing to show until a clip was read; its code need not be there earlier.
+    void import('../nw-waveform/nw-waveform.ts');
   }
 
   get #canPlay(): boolean {

@@ -2,7 +2,6 @@ import { html, LitElement, type TemplateResult } from 'lit';
 import { customElement, property } from 'lit/decorators.js';
 import type { PlotView } from '../../src/bench/preferences.ts';
 import type { Hertz } from '../../src/units.ts';
-import '../nw-curve-table/nw-curve-table.ts';
 import '../nw-figures/nw-figures.ts';
 import type { Figure } from '../nw-figures/nw-figures.ts';
 import '../nw-plot/nw-plot.ts';
@@ -68,6 +67,10 @@ export class NwPlotPanel extends LitElement {
 
   /** Where the reading cursor stands, in hertz. */
   @property({ type: Number }) cursor: Hertz = 1000;
+
+  override willUpdate(): void {
+    if (this.table) void import('../nw-curve-table/nw-curve-table.ts');
+  }
 
   private handleCursor(event: Event): void {
     send(this, 'nw-cursor-set', { frequency: (event.target as NwPlot).cursor });

@@ -2,8 +2,9 @@ import { html, LitElement, nothing, type PropertyValues, type TemplateResult } f
 import { customElement, property, query, state } from 'lit/decorators.js';
 import { live } from 'lit/directives/live.js';
 import { messageOf } from '../../src/errors.ts';
+import { parseValue } from '../../src/parts/read-value.ts';
 import { next, SERIES_NAMES, type SeriesName, seriesValues } from '../../src/parts/series.ts';
-import { formatValue, parseValue, speakValue } from '../../src/parts/value-text.ts';
+import { formatValue, speakValue } from '../../src/parts/value-text.ts';
 import type { UnitSymbol } from '../../src/units.ts';
 import { send } from '../events.ts';
 import { baseStyles } from '../theme.ts';

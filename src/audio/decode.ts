@@ -1,4 +1,5 @@
-import { assertFileSize, assertUsableClip, CLIP_RATES, type Clip, LONGEST_CLIP } from '../clip/clip.ts';
+import type { Clip } from '../clip/clip.ts';
+import { assertFileSize, assertUsableClip, CLIP_RATES, LONGEST_CLIP } from '../clip/limits.ts';
 import { sniff } from '../clip/wav-reader.ts';
 import { NotchworkError } from '../errors.ts';
 import type { Hertz } from '../units.ts';

@@ -1,5 +1,6 @@
 import { NotchworkError } from '../errors.ts';
-import { assertUsableClip, type Clip } from './clip.ts';
+import type { Clip } from './clip.ts';
+import { assertUsableClip } from './limits.ts';
 
 /** What a recording is stored in, told by its first bytes. */
 export type Container = 'wav' | 'flac' | 'ogg' | 'mp3' | 'mp4' | 'aiff' | 'unknown';

@@ -2,10 +2,11 @@ import { describe, expect, it } from 'vitest';
 import { NotchworkError } from '../../../src/errors.ts';
 import { readColourBands } from '../../../src/parts/colour-code.ts';
 import { leastRating, leastResistorRating } from '../../../src/parts/rating.ts';
+import { parseValue, type ValueRange } from '../../../src/parts/read-value.ts';
 import { nearest, neighbours, next } from '../../../src/parts/series.ts';
 import { readToleranceLetter } from '../../../src/parts/tolerance-code.ts';
 import { readFigureCode, readLetterCode } from '../../../src/parts/value-code.ts';
-import { formatValue, parseValue, type ValueRange } from '../../../src/parts/value-text.ts';
+import { formatValue } from '../../../src/parts/value-text.ts';
 import type { UnitSymbol } from '../../../src/units.ts';
 
 /** The typed error that an action throws; the test fails where it throws none, or another. */

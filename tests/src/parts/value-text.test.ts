@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { formatShort, formatValue, parseValue, speakValue } from '../../../src/parts/value-text.ts';
+import { parseValue } from '../../../src/parts/read-value.ts';
+import { formatShort, formatValue, speakValue } from '../../../src/parts/value-text.ts';
 import type { UnitSymbol } from '../../../src/units.ts';
 
 describe('reading a value', () => {
