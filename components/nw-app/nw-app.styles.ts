@@ -22,8 +22,8 @@ export const appStyles = css`
     min-width: 0;
   }
   nw-plot-panel {
-    flex: 1 0 360px;
-    min-height: 360px;
+    flex: 1 0 386px;
+    min-height: 386px;
   }
   nw-line {
     flex: none;

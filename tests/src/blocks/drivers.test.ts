@@ -107,7 +107,7 @@ describe('direct voltages of a cathode follower', () => {
   });
 
   it('are refused where the grid would draw current', () => {
-    expect(() => direct(driverCathodeFollower, { parts: { ...parts, gridVoltage: 290 } }, 5e3)).toThrow(
+    expect(() => direct(driverCathodeFollower, { parts: { ...parts, gridVoltage: 290 } }, 5000)).toThrow(
       /draw current/,
     );
   });

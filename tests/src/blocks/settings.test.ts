@@ -49,7 +49,7 @@ describe('halves of a potentiometer', () => {
   it('add up to all of it, wiper to the anticlockwise end first', () => {
     const settings = withKnob(defaultSettings(toneThreeKnob), 'middle', rotation(0.2));
     expect(potentiometerHalves(toneThreeKnob, settings, 'middle')).toEqual({
-      lower: expect.closeTo(5e3, 6),
+      lower: expect.closeTo(5000, 6),
       upper: expect.closeTo(20e3, 6),
     });
   });
