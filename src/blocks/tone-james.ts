@@ -5,8 +5,9 @@ import { TONE_LOAD_CHOICES, TONE_LOAD_PARTS, toneLoad } from './tone-load.ts';
 
 /**
  * Passive bass and treble after E. J. James, Wireless World, February 1949 (from memory): two dividers
- * side by side, one for each end of the band, each moved by its potentiometer. With the 10 % tapers
- * and parts in the ratio ten to one, both controls are flat at the middle of their travel.
+ * side by side, one for each end of the band, each moved by its potentiometer. With parts in the ratio
+ * ten to one it is flat where the tracks divide so too; on 10 % tapers, 1 to 9, the middle of their
+ * travel is within 0.7 dB of it.
  */
 export const toneJames: Block = {
   slot: 'tone',

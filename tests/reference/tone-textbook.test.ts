@@ -49,8 +49,8 @@ describe('passive bass and treble (E. J. James, Wireless World, February 1949, f
     for (const frequency of BAND) expect(levelOf(flat)(frequency)).toBeCloseTo(20 * Math.log10(1 / 11), 9);
   });
 
-  it('is flat within 1 dB at half turn on its 10 % tapers: 1 to 9 is not quite 1 to 10', () => {
-    expect(spread(oneSpan(placed(toneJames, { parts: PARTS, ...NO_LOAD })).transfer)).toBeLessThan(1);
+  it('is flat within 0.7 dB at half turn on its 10 % tapers: 1 to 9 is not quite 1 to 10', () => {
+    expect(spread(oneSpan(placed(toneJames, { parts: PARTS, ...NO_LOAD })).transfer)).toBeLessThan(0.7);
   });
 
   // The treble arms taken away, down to 1 pF through 100 Ω: a few parts in a million at these corners.

@@ -8,6 +8,7 @@ import { powerFeedback } from '../../../src/blocks/power-feedback.ts';
 import type { PlacedBlock } from '../../../src/blocks/span.ts';
 import { toneBaxandall } from '../../../src/blocks/tone-baxandall.ts';
 import { toneBridgedT } from '../../../src/blocks/tone-bridged-t.ts';
+import { toneJames } from '../../../src/blocks/tone-james.ts';
 import { toneThreeKnob } from '../../../src/blocks/tone-three-knob.ts';
 import { toneTrebleCut } from '../../../src/blocks/tone-treble-cut.ts';
 import { triodePoint } from '../../../src/parts/triode-model.ts';
@@ -112,6 +113,35 @@ describe('networks that pass direct current, by Ohm’s law', () => {
     expect(first.cold).toBeCloseTo(320, 6);
     expect(second.cold).toBeCloseTo((320 * 1e6) / 1.22e6, 6);
     expect(part(stress, 'leg').dissipation).toBe(0);
+  });
+
+  describe('passive bass and treble, whose bass control divides direct voltages', () => {
+    const parts = { bassTop: 100e3, bassPot: 1e6, bassBottom: 10e3, join: 100e3, loadResistance: 1e6 };
+    const stress = stressOf(
+      placed(driverPlainSource, { parts: RESTING }),
+      placed(toneJames, { parts, knobs: { bass: 0.5, treble: 0.5 } }),
+    );
+    const parallel = (first: number, second: number) => 1 / (1 / first + 1 / second);
+
+    it('hands most on turned fully up, whatever the knob is set to', () => {
+      const behind = parallel(1.01e6, 1.1e6);
+      const share = (behind / (100e3 + behind)) * (1 / 1.1);
+      expect(stress.running.output).toBeCloseTo(190 * share, 6);
+      expect(stress.cold.output).toBeCloseTo(320 * share, 6);
+    });
+
+    it('puts most on its upper capacitor turned fully down', () => {
+      const total = 1.1e6 + parallel(10e3, 1.1e6);
+      expect(part(stress, 'bassTopCap').cold).toBeCloseTo((320 * 1e6) / total, 6);
+      expect(part(stress, 'bassTopCap').running).toBeCloseTo((190 * 1e6) / total, 6);
+    });
+
+    it('rates the track as if all of it carried the current of its busier half', () => {
+      const current = 320 / (100e3 + 500e3 + parallel(510e3, 1.1e6)); // the upper half, as set
+      expect(part(stress, 'bassPot').dissipation).toBeCloseTo(current ** 2 * 1e6, 9);
+      // 114 mW, with as much again in hand.
+      expect(part(stress, 'bassPot').rating).toBe(0.25);
+    });
   });
 
   it('leaves a stage within the network out, and says so', () => {

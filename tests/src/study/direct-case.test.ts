@@ -80,6 +80,18 @@ describe('direct voltages of a passive network', () => {
     expect(direct.across(around)).toEqual({ volts: 0, byLeakage: false });
   });
 
+  it('does not reach through the capacitor itself for what it might stand', () => {
+    // Its near end hangs on it alone, and its far end between 120 V and 100 V: it only follows.
+    const elements = [
+      resistor('a', ['in', 'tap'], 20e3),
+      resistor('b', ['tap', '0'], 100e3),
+      capacitor('one', ['in', 'x']),
+      capacitor('two', ['x', 'tap']),
+      capacitor('loose', ['x', 'y']),
+    ];
+    expect(new DirectCase(elements, source(120)).across(elements[4]!).volts).toBe(0);
+  });
+
   it('takes inductors and resistors of no ohms, and all but none, for wires', () => {
     for (const wire of [
       { kind: 'inductor' as const, name: 'choke', nodes: ['in', 'x'] as const, value: 10 },
