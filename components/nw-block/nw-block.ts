@@ -28,7 +28,9 @@ export const SLOT_TITLES: Readonly<Record<SlotName, string>> = {
 
 /** Whether a part stands on the card: one that the wiring uses, and that is not behind a knob there. */
 export function hasChip(block: Block, settings: BlockSettings, part: string): boolean {
-  return block.parts[part]!.kind !== 'potentiometer' && isUsedPart(block, settings, part);
+  const { kind, unit } = block.parts[part]!;
+  // Direct voltages shape nothing that is heard; they stand in the drawer.
+  return kind !== 'potentiometer' && unit !== 'V' && isUsedPart(block, settings, part);
 }
 
 /**
