@@ -16,9 +16,7 @@ import type { PlacedBlock } from '../../src/blocks/span.ts';
 import { durationOf } from '../../src/clip/clip.ts';
 import { placedBlock } from '../../src/design/placed-line.ts';
 import { freeLetter } from '../../src/design/voicings.ts';
-import { messageOf } from '../../src/errors.ts';
 import type { PlotCurve } from '../../src/sheet/plot-model.ts';
-import type { DcStress } from '../../src/study/dc-stress.ts';
 import { SignalReader } from '../controllers/signal-reader.ts';
 import '../nw-header/nw-header.ts';
 import '../nw-line/nw-line.ts';
@@ -81,9 +79,6 @@ export class NwApp extends LitElement {
   @state() private tab = 'listen';
 
   @state() private drawer: SlotName | undefined;
-
-  /** Finds direct voltages; loaded with the first drawer that shows them. */
-  @state() private findStress: typeof import('../../src/study/dc-stress.ts').dcStress | undefined;
 
   @state() private dropping = false;
 
@@ -314,26 +309,9 @@ export class NwApp extends LitElement {
   /** Direct voltages of the driver and its network, in the drawer of either. */
   #stress({ block }: PlacedBlock): TemplateResult | typeof nothing {
     if (block.slot !== 'driver' && block.slot !== 'tone') return nothing;
-    if (this.findStress === undefined) {
-      void this.#loadStress();
-      return nothing;
-    }
-    let stress: DcStress | undefined;
-    let problem = '';
-    try {
-      stress = this.findStress(this.#design.value.active.analysis.placed);
-    } catch (error) {
-      problem = messageOf(error);
-    }
-    return html`<nw-stress-table slot="stress" .block=${block} .stress=${stress} .problem=${problem}></nw-stress-table>`;
-  }
-
-  async #loadStress(): Promise<void> {
-    const [{ dcStress }] = await Promise.all([
-      import('../../src/study/dc-stress.ts'),
-      import('../nw-stress-table/nw-stress-table.ts'),
-    ]);
-    this.findStress = dcStress;
+    void import('../nw-stress-table/nw-stress-table.ts');
+    const { placed } = this.#design.value.active.analysis;
+    return html`<nw-stress-table slot="stress" .block=${block} .placed=${placed}></nw-stress-table>`;
   }
 
   #playBar(): TemplateResult {

@@ -4,7 +4,6 @@ import type { Region } from '../../src/audio/engine-types.ts';
 import type { Overview } from '../../src/clip/overview.ts';
 import type { Decibels, Seconds } from '../../src/units.ts';
 import { send } from '../events.ts';
-import '../nw-level-meter/nw-level-meter.ts';
 import '../nw-menu/nw-menu.ts';
 import type { MenuItem } from '../nw-menu/nw-menu.ts';
 import '../nw-notice/nw-notice.ts';
@@ -124,8 +123,9 @@ export class NwPlayBar extends LitElement {
   }
 
   override firstUpdated(): void {
-    // The waveform has nothing to show until a clip was read; its code need not be there earlier.
+    // Neither has anything to show until a clip was read; their code need not be there earlier.
     void import('../nw-waveform/nw-waveform.ts');
+    void import('../nw-level-meter/nw-level-meter.ts');
   }
 
   get #canPlay(): boolean {

@@ -1,8 +1,10 @@
 import { html, LitElement, nothing, type TemplateResult } from 'lit';
 import { customElement, property } from 'lit/decorators.js';
 import type { Block } from '../../src/blocks/block.ts';
+import type { PlacedBlock } from '../../src/blocks/span.ts';
+import { messageOf } from '../../src/errors.ts';
 import { formatValue } from '../../src/parts/value-text.ts';
-import type { DcStress, PartStress } from '../../src/study/dc-stress.ts';
+import { type DcStress, dcStress, type PartStress } from '../../src/study/dc-stress.ts';
 import '../nw-notice/nw-notice.ts';
 import { baseStyles } from '../theme.ts';
 import { stressTableStyles } from './nw-stress-table.styles.ts';
@@ -20,11 +22,8 @@ export class NwStressTable extends LitElement {
   /** The block whose parts are shown. */
   @property({ attribute: false }) block!: Block;
 
-  /** Stress of driver and network together. */
-  @property({ attribute: false }) stress: DcStress | undefined;
-
-  /** Why there is none, where it could not be found. */
-  @property() problem = '';
+  /** The blocks in the line. */
+  @property({ attribute: false }) placed: readonly PlacedBlock[] = [];
 
   #row(part: PartStress): TemplateResult {
     const { kind, running, cold, dissipation, rating, byLeakage } = part;
@@ -76,9 +75,21 @@ export class NwStressTable extends LitElement {
     `;
   }
 
+  /** The table, or why there is none. */
+  #inside(): TemplateResult {
+    try {
+      const stress = dcStress(this.placed);
+      return stress === undefined
+        ? html`<p class="soft">Nothing here is under direct voltage.</p>`
+        : this.#table(stress);
+    } catch (error) {
+      return html`<p class="soft">${messageOf(error)}</p>`;
+    }
+  }
+
   override render(): TemplateResult {
     return html`<h3>What the parts have to stand</h3>
-      ${this.stress === undefined ? html`<p class="soft">${this.problem || 'Nothing here is under direct voltage.'}</p>` : this.#table(this.stress)}`;
+      ${this.#inside()}`;
   }
 }
 

@@ -1,6 +1,7 @@
 import { aTimeout, expect, fixture, html, waitUntil } from '@open-wc/testing';
 import { sendKeys, setViewport } from '@web/test-runner-commands';
 import '../../../components/nw-play-bar/nw-play-bar.ts';
+import '../../../components/nw-level-meter/nw-level-meter.ts';
 import '../../../components/nw-waveform/nw-waveform.ts';
 import type { NwPlayBar } from '../../../components/nw-play-bar/nw-play-bar.ts';
 import { expectAccessibleInBothThemes, setTheme } from '../both-themes.ts';

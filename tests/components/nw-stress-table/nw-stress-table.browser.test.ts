@@ -1,19 +1,20 @@
 import { expect, fixture, html } from '@open-wc/testing';
 import '../../../components/nw-stress-table/nw-stress-table.ts';
 import type { NwStressTable } from '../../../components/nw-stress-table/nw-stress-table.ts';
+import { blocksOf } from '../../../src/blocks/catalogue.ts';
+import { defaultSettings } from '../../../src/blocks/settings.ts';
+import type { PlacedBlock } from '../../../src/blocks/span.ts';
 import { defaultLine } from '../../../src/design/design.ts';
 import { placedLine } from '../../../src/design/placed-line.ts';
-import { dcStress } from '../../../src/study/dc-stress.ts';
 import { expectAccessibleInBothThemes, setTheme } from '../both-themes.ts';
 
 const placed = placedLine(defaultLine());
 const tone = placed.find((entry) => entry.block.slot === 'tone')!;
 
-async function make(problem = ''): Promise<NwStressTable> {
+async function make(line: readonly PlacedBlock[] = placed): Promise<NwStressTable> {
   setTheme(undefined);
-  const stress = problem === '' ? dcStress(placed) : undefined;
   return fixture<NwStressTable>(
-    html`<nw-stress-table .block=${tone.block} .stress=${stress} .problem=${problem}></nw-stress-table>`,
+    html`<nw-stress-table .block=${tone.block} .placed=${line}></nw-stress-table>`,
   );
 }
 
@@ -34,6 +35,13 @@ describe('nw-stress-table', () => {
   });
 
   it('says why there is no table', async () => {
-    expect((await make('The valve cannot rest there.')).shadowRoot!.textContent).to.contain('cannot rest');
+    expect((await make([tone])).shadowRoot!.textContent).to.contain('Nothing here is under direct voltage');
+    const [follower] = blocksOf('driver').filter((block) => block.variant === 'cathode-follower');
+    const settings = defaultSettings(follower!);
+    const overdriven: PlacedBlock = {
+      block: follower!,
+      settings: { ...settings, parts: { ...settings.parts, gridVoltage: 1000 } },
+    };
+    expect((await make([overdriven, tone])).shadowRoot!.textContent).to.match(/grid/);
   });
 });
