@@ -13,7 +13,7 @@ const browser = await chromium.launch({
   executablePath: await ensureChromium(),
   args: ['--no-sandbox', '--disable-gpu'],
 });
-const page = await browser.newPage({ viewport: { width: 1280, height: 860 }, colorScheme: 'light' });
+const page = await browser.newPage({ viewport: { width: 1440, height: 900 }, colorScheme: 'light' });
 await page.addInitScript(() =>
   localStorage.setItem('notchwork-preferences', JSON.stringify({ hearingNoteRead: true })),
 );
@@ -25,7 +25,7 @@ await page.evaluate(() => {
   bench.store.apply(named('Attic amplifier'), 'title');
 });
 await page.getByText('+ Keep as B').click();
-await page.locator('nw-part-chip', { hasText: '' }).nth(4).click();
+await page.locator('nw-part-chip', { hasText: 'Treble cap' }).click();
 await page.waitForTimeout(300);
 await page.getByRole('button', { name: /hear 680/ }).click();
 await page.waitForTimeout(500);
