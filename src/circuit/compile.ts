@@ -1,17 +1,13 @@
 import { NotchworkError } from '../errors.ts';
 import type { TransferFunction } from '../transfer-function.ts';
-import { buildDiagram, type Diagram, type DiagramLimits } from './diagram.ts';
+import { buildDiagram, type Diagram } from './diagram.ts';
 import { Evaluator } from './evaluator.ts';
+import { checkSize, DEFAULT_LIMITS, type DiagramLimits } from './limits.ts';
 import type { Network, NetworkResponse } from './network.ts';
+import { scaled, unscale } from './scaling.ts';
+import { checkTopology } from './topology.ts';
 import { twoGraph } from './two-graph.ts';
-import type { Wiring } from './wiring.ts';
-
-/** Most nodes and elements in one wiring. */
-export const MOST_NODES = 60;
-export const MOST_ELEMENTS = 150;
-
-/** Partial sums that are compiled at the most: a few hundred milliseconds of work. */
-export const DEFAULT_LIMITS: DiagramLimits = { steps: 60_000 };
+import type { ElementKind, Wiring } from './wiring.ts';
 
 function countTrees(diagram: Diagram): number {
   const counts: number[] = [];
@@ -20,60 +16,6 @@ function countTrees(diagram: Diagram): number {
     counts.push(including.reduce((sum, branch) => sum + count(branch?.next), count(without?.next)));
   }
   return count(diagram.roots[0]?.next);
-}
-
-function checkSize(wiring: Wiring, nodeCount: number): void {
-  if (nodeCount > MOST_NODES || wiring.elements.length > MOST_ELEMENTS) {
-    throw new NotchworkError(
-      'netlist-too-large',
-      `This circuit has ${nodeCount} nodes and ${wiring.elements.length} elements; at most ${MOST_NODES} and ${MOST_ELEMENTS} can be solved exactly.`,
-    );
-  }
-}
-
-/** Names nodes that no path of elements joins to ground, for the message when nothing can be solved. */
-function floatingNodes(wiring: Wiring): readonly string[] {
-  const joined = new Set(['0']);
-  const pairs = [wiring.source, ...wiring.elements.map((element) => element.nodes)];
-  for (let changed = true; changed; ) {
-    changed = false;
-    for (const [from, to] of pairs) {
-      if (joined.has(from) !== joined.has(to)) {
-        joined.add(from).add(to);
-        changed = true;
-      }
-    }
-  }
-  const all = new Set(
-    [
-      ...pairs,
-      ...wiring.elements.flatMap((e) => ('control' in e ? [e.control] : [])),
-      ...wiring.outputs,
-    ].flat(),
-  );
-  return [...all].filter((node) => !joined.has(node));
-}
-
-function checkTopology(wiring: Wiring, diagram: Diagram): void {
-  if (wiring.source[0] === wiring.source[1]) {
-    throw new NotchworkError(
-      'netlist-topology',
-      `The source has both ends at node ${wiring.source[0]}; join it to two nodes.`,
-    );
-  }
-  const floating = floatingNodes(wiring);
-  if (floating.length > 0) {
-    throw new NotchworkError(
-      'netlist-topology',
-      `Node ${floating.join(', ')} has no path to ground (node 0), so its voltage is undefined. Join it, for instance by a large resistor.`,
-    );
-  }
-  if (diagram.roots[0] === undefined) {
-    throw new NotchworkError(
-      'netlist-topology',
-      'This circuit has no solution: a loop of ideal voltage sources, or a node that only current sources and controls touch. Put a resistor in.',
-    );
-  }
 }
 
 /** Drops common zeros at s = 0 and zero leading coefficients, so that the order is what it looks like. */
@@ -94,20 +36,33 @@ class CompiledNetwork implements Network {
   readonly wiring: Wiring;
   readonly treeCount: number;
   readonly #evaluator: Evaluator;
+  readonly #kinds: readonly ElementKind[];
 
   constructor(wiring: Wiring, diagram: Diagram) {
     this.wiring = wiring;
     this.treeCount = countTrees(diagram);
     this.#evaluator = new Evaluator(diagram, wiring.elements.length);
+    this.#kinds = wiring.elements.map((element) => element.kind);
   }
 
   evaluate(values: ArrayLike<number>): NetworkResponse {
-    const [denominator, ...numerators] = this.#evaluator.evaluate(values);
-    if (!denominator!.some((coefficient) => coefficient !== 0)) {
+    const scaling = scaled(this.#kinds, values);
+    const [denominator, ...numerators] = this.#evaluator.evaluate(scaling.values);
+    const lowest = denominator!.findIndex((coefficient) => coefficient !== 0);
+    if (lowest < 0) {
       throw new NotchworkError(
         'circuit-unsolvable',
         'These values leave the circuit without a solution: a short across the source, or a part of it cut off. Change the value set last.',
       );
+    }
+    for (const coefficients of [denominator!, ...numerators]) {
+      unscale(coefficients, scaling.omega, lowest);
+      if (!coefficients.every(Number.isFinite)) {
+        throw new NotchworkError(
+          'circuit-unsolvable',
+          'These values are too large or too far apart to calculate with, or not numbers. Change the value set last.',
+        );
+      }
     }
     return { denominator: denominator!, numerators };
   }
@@ -131,15 +86,21 @@ class CompiledNetwork implements Network {
  * coefficient keeps full relative precision; a resistor of 0 Ω is nothing special.
  *
  * With `C` in the tree contributing `sC`, and `R` or `sL` contributing when *not* in the tree, all
- * coefficients come out multiplied by `ΠR·ΠsL`, which cancels in the quotient.
+ * coefficients come out multiplied by `ΠR·ΠsL` (and, in a large circuit, by a power of two: see
+ * `scaling.ts`), which cancels in the quotient.
  *
- * @throws NotchworkError `netlist-topology` where no values could give a solution,
- *   `netlist-too-large` beyond {@link MOST_NODES}, {@link MOST_ELEMENTS} or the step limit.
+ * @throws NotchworkError `netlist-topology` where no values could give a solution, naming the nodes
+ *   or elements; `netlist-too-large` beyond the limits of `limits.ts`.
  */
 export function compile(wiring: Wiring, limits: DiagramLimits = DEFAULT_LIMITS): Network {
-  const graph = twoGraph(wiring);
-  checkSize(wiring, graph.nodeCount);
-  const diagram = buildDiagram(graph, limits);
-  checkTopology(wiring, diagram);
+  checkSize(wiring);
+  checkTopology(wiring);
+  const diagram = buildDiagram(twoGraph(wiring), limits);
+  if (diagram.roots[0] === undefined) {
+    throw new NotchworkError(
+      'netlist-topology',
+      'This circuit has no solution whatever its values: some controlled source leaves no other way for its current, or nothing fixes the voltage that controls it. Put a resistor in.',
+    );
+  }
   return new CompiledNetwork(wiring, diagram);
 }

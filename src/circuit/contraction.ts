@@ -41,36 +41,36 @@ export function contract(blocks: Blocks, edge: Edge): Contracted | undefined {
   if (from === to) return undefined;
   const gone = Math.max(from, to);
   const kept = Math.min(from, to);
-  const entry = gone === from ? 1 : -1;
-  const sign = rowOf(blocks, gone) % 2 === 0 ? entry : -entry;
-  return { blocks: blocks.map((label) => (label === gone ? kept : label)), sign: sign as 1 | -1 };
+  const isPositive = (gone === from) === (rowOf(blocks, gone) % 2 === 0);
+  const merged = blocks.slice();
+  for (let node = 0; node < merged.length; node += 1) if (merged[node] === gone) merged[node] = kept;
+  return { blocks: merged, sign: isPositive ? 1 : -1 };
 }
 
 /**
- * Closes the nodes that no undecided edge touches and gives every block its smallest open node as
- * label. Renaming blocks may change the order of the rows, hence the sign. `undefined` where a block
- * without ground has no open node left: it can never be joined, and the determinant vanishes.
+ * Closes the nodes that no undecided edge touches (`open[node]` is 0; ground is always open) and gives
+ * every block its smallest open node as label. Renaming blocks may change the order of the rows, hence
+ * the sign. `undefined` where a block without ground has no open node left: it can never be joined,
+ * and the determinant vanishes.
  */
-export function close(blocks: Blocks, isOpen: (node: number) => boolean): Contracted | undefined {
-  const renamed = new Uint8Array(blocks.length).fill(CLOSED);
-  const labels = new Map<number, number>([[0, 0]]);
-  for (let node = 0; node < blocks.length; node += 1) {
+export function close(blocks: Blocks, open: Uint8Array): Contracted | undefined {
+  const count = blocks.length;
+  const renamed = new Uint8Array(count).fill(CLOSED);
+  const fresh = new Uint8Array(count).fill(CLOSED); // by old label
+  for (let node = 0; node < count; node += 1) {
     const label = blocks[node]!;
-    if (label !== CLOSED && isOpen(node) && !labels.has(label)) labels.set(label, node);
+    if (label === CLOSED || open[node] === 0) continue;
+    if (fresh[label] === CLOSED) fresh[label] = node;
+    renamed[node] = fresh[label]!;
   }
   let sign: 1 | -1 = 1;
-  const order: number[] = [];
-  for (let node = 0; node < blocks.length; node += 1) {
-    const label = blocks[node]!;
-    if (label === CLOSED) continue;
-    const fresh = labels.get(label);
-    if (fresh === undefined) return undefined;
-    if (isOpen(node) || node === 0) renamed[node] = fresh;
-    if (label === node && label !== 0) order.push(fresh);
-  }
-  for (let first = 0; first < order.length; first += 1) {
-    for (let second = first + 1; second < order.length; second += 1) {
-      if (order[first]! > order[second]!) sign = sign === 1 ? -1 : 1;
+  for (let label = 1; label < count; label += 1) {
+    if (blocks[label] !== label) continue;
+    const own = fresh[label]!;
+    if (own === CLOSED) return undefined;
+    if (own === label) continue; // a name kept is the least of all that are left, so no row passes it
+    for (let other = label + 1; other < count; other += 1) {
+      if (blocks[other] === other && fresh[other]! < own) sign = sign === 1 ? -1 : 1;
     }
   }
   return { blocks: renamed, sign };

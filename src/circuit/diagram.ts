@@ -1,5 +1,6 @@
 import { NotchworkError } from '../errors.ts';
-import { type Blocks, close, contract, separateBlocks } from './contraction.ts';
+import { type Blocks, CLOSED, close, contract, separateBlocks } from './contraction.ts';
+import type { DiagramLimits } from './limits.ts';
 import type { Inclusion, TreeEdge, TwoGraph } from './two-graph.ts';
 
 /** A branch of a step: the sum that follows if its edge is taken in one particular way. */
@@ -29,34 +30,51 @@ export interface Diagram {
   readonly roots: readonly (Branch | undefined)[];
 }
 
-/** How much work a wiring may take to compile. */
-export interface DiagramLimits {
-  /** Most steps in the diagram; the default keeps compiling well under a second. */
-  readonly steps: number;
-}
-
+/** What has been decided so far, as far as it matters: one and the same object twice where the graphs agree. */
 interface State {
   readonly current: Blocks;
   readonly voltage: Blocks;
 }
 
-function keyOf(level: number, { current, voltage }: State): string {
-  return `${String.fromCharCode(level, ...current)}${String.fromCharCode(...voltage)}`;
+/** A state as text: the labels of the open nodes, in one graph or, where they differ, in both. */
+function keyOf({ current, voltage }: State): string {
+  let key = labelsOf(current);
+  if (current !== voltage) key += `|${labelsOf(voltage)}`;
+  return key;
 }
 
-/** After deciding edge k (and at −1, before the first), which nodes do later edges touch? */
-function openNodes(graph: TwoGraph): readonly Uint8Array[] {
-  const levels: Uint8Array[] = [];
-  const open = new Uint8Array(graph.nodeCount);
-  open[0] = 1;
-  for (let index = graph.edges.length; index >= 0; index -= 1) {
-    levels[index] = Uint8Array.from(open);
-    const edge = graph.edges[index - 1];
-    for (const { current, voltage } of edge?.inclusions ?? []) {
-      open[current.from] = 1;
-      open[current.to] = 1;
-      open[voltage.from] = 1;
-      open[voltage.to] = 1;
+function labelsOf(blocks: Blocks): string {
+  let labels = '';
+  for (const label of blocks) if (label !== CLOSED) labels += String.fromCharCode(label);
+  return labels;
+}
+
+function areEqual(first: Blocks, second: Blocks): boolean {
+  for (let node = 0; node < first.length; node += 1) if (first[node] !== second[node]) return false;
+  return true;
+}
+
+/** Which nodes edges yet to be decided touch, in either graph; one and the same object twice where they agree. */
+interface OpenNodes {
+  readonly current: Uint8Array;
+  readonly voltage: Uint8Array;
+}
+
+/** Open nodes before each edge, and after the last. */
+function openNodes({ edges, nodeCount }: TwoGraph): readonly OpenNodes[] {
+  const levels: OpenNodes[] = [];
+  const current = new Uint8Array(nodeCount);
+  const voltage = new Uint8Array(nodeCount);
+  current[0] = 1;
+  voltage[0] = 1;
+  for (let level = edges.length; level >= 0; level -= 1) {
+    const own = current.slice();
+    levels[level] = { current: own, voltage: areEqual(current, voltage) ? own : voltage.slice() };
+    for (const inclusion of edges[level - 1]?.inclusions ?? []) {
+      current[inclusion.current.from] = 1;
+      current[inclusion.current.to] = 1;
+      voltage[inclusion.voltage.from] = 1;
+      voltage[inclusion.voltage.to] = 1;
     }
   }
   return levels;
@@ -65,14 +83,17 @@ function openNodes(graph: TwoGraph): readonly Uint8Array[] {
 class DiagramBuilder {
   readonly #graph: TwoGraph;
   readonly #limits: DiagramLimits;
-  readonly #open: readonly Uint8Array[];
-  readonly #known = new Map<string, number | undefined>();
+  readonly #open: readonly OpenNodes[];
+  /** By level and key: the step, or `undefined` for a state that leads nowhere. */
+  readonly #known: readonly Map<string, number | undefined>[];
+  #states = 0;
   readonly steps: Step[] = [];
 
   constructor(graph: TwoGraph, limits: DiagramLimits) {
     this.#graph = graph;
     this.#limits = limits;
     this.#open = openNodes(graph);
+    this.#known = graph.edges.map(() => new Map());
   }
 
   /** The sum over all trees that start with one inclusion of the source. */
@@ -83,8 +104,10 @@ class DiagramBuilder {
 
   #include(state: State, inclusion: Inclusion, level: number): Branch | undefined {
     const current = contract(state.current, inclusion.current);
-    const voltage = contract(state.voltage, inclusion.voltage);
-    if (current === undefined || voltage === undefined) return undefined;
+    if (current === undefined) return undefined;
+    const isSame = state.voltage === state.current && inclusion.voltage === inclusion.current;
+    const voltage = isSame ? current : contract(state.voltage, inclusion.voltage);
+    if (voltage === undefined) return undefined;
     const sign = current.sign === voltage.sign ? 1 : -1;
     return this.#enter({ current: current.blocks, voltage: voltage.blocks }, sign, level);
   }
@@ -92,10 +115,16 @@ class DiagramBuilder {
   /** Canonical form of a state before edge `level`, then the step that goes on from there. */
   #enter(state: State, sign: 1 | -1, level: number): Branch | undefined {
     const open = this.#open[level]!;
-    const current = close(state.current, (node) => open[node] === 1);
-    const voltage = close(state.voltage, (node) => open[node] === 1);
-    if (current === undefined || voltage === undefined) return undefined;
-    const next = this.#step({ current: current.blocks, voltage: voltage.blocks }, level);
+    const current = close(state.current, open.current);
+    if (current === undefined) return undefined;
+    const isSame = state.voltage === state.current && open.voltage === open.current;
+    const voltage = isSame ? current : close(state.voltage, open.voltage);
+    if (voltage === undefined) return undefined;
+    const agree = isSame || areEqual(voltage.blocks, current.blocks);
+    const next = this.#step(
+      { current: current.blocks, voltage: agree ? current.blocks : voltage.blocks },
+      level,
+    );
     if (next === undefined) return undefined;
     return { next, sign: current.sign === voltage.sign ? sign : sign === 1 ? -1 : 1 };
   }
@@ -103,23 +132,30 @@ class DiagramBuilder {
   #step(state: State, level: number): number | undefined {
     const edge = this.#graph.edges[level];
     if (edge === undefined) return END;
-    const key = keyOf(level, state);
-    if (this.#known.has(key)) return this.#known.get(key);
+    const known = this.#known[level]!;
+    const key = keyOf(state);
+    const index = known.get(key);
+    if (index !== undefined || known.has(key)) return index;
+    const fresh = this.#expand(state, edge, level);
+    known.set(key, fresh);
+    return fresh;
+  }
+
+  #expand(state: State, edge: TreeEdge, level: number): number | undefined {
+    this.#states += 1;
+    if (this.#states > this.#limits.states) this.#refuse(this.#limits.states);
     const without = edge.optional ? this.#enter(state, 1, level + 1) : undefined;
     const including = edge.inclusions.map((inclusion) => this.#include(state, inclusion, level + 1));
-    let index: number | undefined;
-    if (without !== undefined || including.some((branch) => branch !== undefined)) {
-      if (this.steps.length >= this.#limits.steps) {
-        throw new NotchworkError(
-          'netlist-too-large',
-          `This circuit is too tangled to solve exactly: more than ${this.#limits.steps} partial sums for ${this.#graph.nodeCount} nodes and ${this.#graph.edges.length} elements. Split it, or leave out elements that do not matter.`,
-        );
-      }
-      index = this.steps.length;
-      this.steps.push({ edge, without, including });
-    }
-    this.#known.set(key, index);
-    return index;
+    if (without === undefined && including.every((branch) => branch === undefined)) return undefined;
+    if (this.steps.length >= this.#limits.steps) this.#refuse(this.#limits.steps);
+    return this.steps.push({ edge, without, including }) - 1;
+  }
+
+  #refuse(count: number): never {
+    throw new NotchworkError(
+      'netlist-too-large',
+      `This circuit is too tangled to solve exactly: more than ${count} partial sums for ${this.#graph.nodeCount} nodes and ${this.#graph.edges.length} elements. Split it, or leave out elements that do not matter.`,
+    );
   }
 }
 

@@ -1,6 +1,6 @@
 import { NotchworkError } from '../errors.ts';
-import { DEFAULT_LIMITS } from './compile.ts';
 import { type Branch, buildDiagram, type Diagram, END, type Step } from './diagram.ts';
+import { checkSize, DEFAULT_LIMITS } from './limits.ts';
 import { twoGraph } from './two-graph.ts';
 import type { Wiring } from './wiring.ts';
 
@@ -136,6 +136,7 @@ function texts(
  *   by size; `netlist-topology` where the denominator has no term at all.
  */
 export function formulaOf(wiring: Wiring, mostTerms: number = MOST_TERMS): Formula {
+  checkSize(wiring);
   const diagram = buildDiagram(twoGraph(wiring), DEFAULT_LIMITS);
   const count = countTerms(diagram);
   if (count > mostTerms) {

@@ -1,9 +1,11 @@
 import { NotchworkError } from '../errors.ts';
 import type { TransferFunction } from '../transfer-function.ts';
-import { compile, DEFAULT_LIMITS } from './compile.ts';
+import { compile } from './compile.ts';
 import { buildDiagram } from './diagram.ts';
 import { Evaluator } from './evaluator.ts';
 import { JoinedNodes } from './joined-nodes.ts';
+import { DEFAULT_LIMITS } from './limits.ts';
+import { scaled, unscale } from './scaling.ts';
 import { twoGraph } from './two-graph.ts';
 import { type Element, GROUND, type NodeName, type NodePair, type Wiring } from './wiring.ts';
 
@@ -26,7 +28,7 @@ function merged(elements: readonly Element[], pairs: readonly NodePair[]): reado
 }
 
 /** The nodal determinant, times all resistances and `sL`; empty of nonzero terms where it vanishes. */
-function determinant(elements: readonly Element[], values: ArrayLike<number>): readonly number[] {
+function determinant(elements: readonly Element[], values: ArrayLike<number>): number[] {
   const graph = twoGraph({ elements, source: [ASIDE, GROUND], outputs: [] });
   const diagram = buildDiagram(graph, DEFAULT_LIMITS);
   return new Evaluator(diagram, elements.length).evaluate(values)[0]!;
@@ -81,15 +83,24 @@ export function impedance(
   const [meter] = merged([{ kind: 'resistor', name: 'meter', nodes }], rest);
   const [positive, negative] = meter!.nodes;
   if (positive === negative) return { numerator: [0], denominator: [1] };
+  const scaling = scaled(
+    wiring.elements.map((element) => element.kind),
+    values,
+  );
   const resting = merged(wiring.elements, rest);
   const touched = new Set([GROUND, ...resting.flatMap((element) => element.nodes)]);
-  const open = touched.has(positive) && touched.has(negative) ? determinant(resting, values) : [0];
-  if (!open.some((coefficient) => coefficient !== 0)) {
+  const open = touched.has(positive) && touched.has(negative) ? determinant(resting, scaling.values) : [0];
+  const lowest = open.findIndex((coefficient) => coefficient !== 0);
+  if (lowest < 0) {
     throw new NotchworkError(
       'circuit-unsolvable',
       `Between ${nodes[0]} and ${nodes[1]} the impedance is infinite at every frequency: nothing joins them. Add the load that would be there.`,
     );
   }
-  const joined = determinant(merged(wiring.elements, [...rest, nodes]), values);
-  return withoutCommonZeros(joined, open);
+  const joined = determinant(merged(wiring.elements, [...rest, nodes]), scaling.values);
+  for (const coefficients of [joined, open]) unscale(coefficients, scaling.omega, lowest);
+  return withoutCommonZeros(
+    joined.map((coefficient) => coefficient * scaling.ohms),
+    open,
+  );
 }

@@ -1,4 +1,5 @@
 import { NotchworkError } from '../errors.ts';
+import { orderEdges } from './edge-order.ts';
 import { type Element, GROUND, type NodeName, type NodePair, type Wiring } from './wiring.ts';
 
 /**
@@ -73,45 +74,6 @@ function treeEdge(element: Element, index: number, edgeOf: (pair: NodePair) => E
 }
 
 /**
- * Orders edges so that few nodes are open (touched by decided and by undecided edges) at any time:
- * greedily the edge that leaves the fewest open nodes, which keeps the diagram small.
- */
-function orderEdges(edges: readonly TreeEdge[], nodeCount: number, opened: Iterable<number>): TreeEdge[] {
-  const nodesOf = (edge: TreeEdge): Set<number> =>
-    new Set(
-      edge.inclusions.flatMap(({ current, voltage }) => [current.from, current.to, voltage.from, voltage.to]),
-    );
-  const remaining = edges.map((edge) => ({ edge, nodes: nodesOf(edge) }));
-  const uses = new Array<number>(nodeCount).fill(0);
-  for (const { nodes } of remaining) for (const node of nodes) uses[node] = uses[node]! + 1;
-  const open = new Set(opened);
-  const ordered: TreeEdge[] = [];
-  while (remaining.length > 0) {
-    let best = 0;
-    let bestCost = Number.POSITIVE_INFINITY;
-    remaining.forEach(({ nodes }, index) => {
-      let cost = 0;
-      for (const node of nodes) {
-        if (!open.has(node)) cost += 1;
-        if (uses[node] === 1) cost -= 1;
-      }
-      if (cost < bestCost) {
-        best = index;
-        bestCost = cost;
-      }
-    });
-    const [chosen] = remaining.splice(best, 1);
-    ordered.push(chosen!.edge);
-    for (const node of chosen!.nodes) {
-      open.add(node);
-      uses[node] = uses[node]! - 1;
-      if (uses[node] === 0) open.delete(node);
-    }
-  }
-  return ordered;
-}
-
-/**
  * Numbers the nodes of a wiring and sets up both graphs.
  *
  * @throws NotchworkError `netlist-topology` for a name used twice.
@@ -139,10 +101,5 @@ export function twoGraph(wiring: Wiring): TwoGraph {
     (pair): Inclusion => ({ current, voltage: edgeOf(pair) }),
   );
   const edges = wiring.elements.map((element, index) => treeEdge(element, index, edgeOf));
-  const opened = source.flatMap(({ voltage }) => [voltage.from, voltage.to]);
-  return {
-    nodeCount: numbers.size,
-    source,
-    edges: orderEdges(edges, numbers.size, [current.from, current.to, ...opened]),
-  };
+  return { nodeCount: numbers.size, source, edges: orderEdges(edges, numbers.size, source) };
 }

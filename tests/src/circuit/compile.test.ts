@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { compile, MOST_ELEMENTS } from '../../../src/circuit/compile.ts';
+import { compile } from '../../../src/circuit/compile.ts';
+import { MOST_ELEMENTS } from '../../../src/circuit/limits.ts';
 import type { Element, Wiring } from '../../../src/circuit/wiring.ts';
 import { NotchworkError } from '../../../src/errors.ts';
 import { seededRandom } from '../../../src/study/blind-trial.ts';
