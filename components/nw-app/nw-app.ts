@@ -27,7 +27,6 @@ import '../nw-notice/nw-notice.ts';
 import '../nw-play-bar/nw-play-bar.ts';
 import '../nw-plot-panel/nw-plot-panel.ts';
 import type { NwSwapPanel } from '../nw-swap-panel/nw-swap-panel.ts';
-import '../nw-tabs/nw-tabs.ts';
 import type { NwTabs, Tab } from '../nw-tabs/nw-tabs.ts';
 import '../nw-voicings/nw-voicings.ts';
 import { baseStyles, installTheme } from '../theme.ts';
@@ -42,10 +41,10 @@ const TABS: readonly Tab[] = [
 const OPEN_DESIGN = 'open-design';
 
 const FILES: readonly MenuItem[] = [
-  { id: OPEN_DESIGN, label: 'Open a design…', note: 'or drop one on the page' },
-  { id: 'design', label: 'Save the design', note: 'all voicings, as a JSON file' },
-  { id: 'csv', label: 'Curve as CSV', note: 'level, phase and the digital filter' },
-  { id: 'svg', label: 'Plot as SVG', note: 'vectors on white, for paper' },
+  { id: OPEN_DESIGN, label: 'Open a design…' },
+  { id: 'design', label: 'Save the design' },
+  { id: 'csv', label: 'Curve as CSV' },
+  { id: 'svg', label: 'Plot as SVG' },
   { id: 'png', label: 'Plot as PNG' },
   { id: 'wav24', label: 'Clip through the line, 24-bit WAV' },
   { id: 'wav32', label: 'Clip through the line, float WAV' },
@@ -60,8 +59,8 @@ const PLOT_TITLES = {
 const REFERENCE = {
   magnitude:
     '0 dB is the driver’s unloaded output. The power stage counts from its own gain at 1 kHz, presence down.',
-  phase: 'Of the whole line, from the driver’s unloaded output.',
-  difference: '0 dB is the circuit itself; the curve ends at half the sample rate.',
+  phase: 'Of the whole line.',
+  difference: '0 dB is the circuit itself.',
 } as const;
 
 /**
@@ -196,6 +195,7 @@ export class NwApp extends LitElement {
 
   /** Elements that the first screen does not show come after it. */
   #loadTheRest(): void {
+    void import('../nw-tabs/nw-tabs.ts');
     void import('../nw-listen-panel/nw-listen-panel.ts');
     void import('../nw-parts-drawer/nw-parts-drawer.ts');
     void import('../nw-swap-panel/nw-swap-panel.ts');

@@ -1,4 +1,4 @@
-import type { Edge } from './two-graph.ts';
+import type { Edge } from './tree-edge.ts';
 
 /**
  * The state of one graph while edges are taken into a tree: which nodes have been merged. `blocks[node]`

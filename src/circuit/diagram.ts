@@ -1,7 +1,8 @@
 import { NotchworkError } from '../errors.ts';
 import { type Blocks, CLOSED, close, contract, separateBlocks } from './contraction.ts';
 import type { DiagramLimits } from './limits.ts';
-import type { Inclusion, TreeEdge, TwoGraph } from './two-graph.ts';
+import type { Inclusion, TreeEdge } from './tree-edge.ts';
+import type { TwoGraph } from './two-graph.ts';
 
 /** A branch of a step: the sum that follows if its edge is taken in one particular way. */
 export interface Branch {

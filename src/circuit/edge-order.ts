@@ -1,4 +1,4 @@
-import type { Inclusion, TreeEdge } from './two-graph.ts';
+import type { Inclusion, TreeEdge } from './tree-edge.ts';
 
 /** Most starts that are tried. */
 const MOST_STARTS = 12;

@@ -1,6 +1,9 @@
 import { NotchworkError } from '../errors.ts';
 import { orderEdges } from './edge-order.ts';
+import type { Edge, Inclusion, TreeEdge } from './tree-edge.ts';
 import { type Element, GROUND, type NodeName, type NodePair, type Wiring } from './wiring.ts';
+
+export type { Edge, Inclusion, TreeEdge } from './tree-edge.ts';
 
 /**
  * The two graphs of a wiring. Every element is an edge in the current graph (where its current
@@ -9,29 +12,6 @@ import { type Element, GROUND, type NodeName, type NodePair, type Wiring } from 
  * (Kirchhoff 1847 for passive networks; W. Mayeda, Graph Theory, 1972, ch. 9, for active ones, from
  * memory).
  */
-
-/** An edge between two node numbers; ground is number 0. */
-export interface Edge {
-  readonly from: number;
-  readonly to: number;
-}
-
-/** One way of putting an element into a tree. */
-export interface Inclusion {
-  readonly current: Edge;
-  readonly voltage: Edge;
-}
-
-/** An element (or the source) as the tree search sees it. */
-export interface TreeEdge {
-  /** Index into the wiring's elements; −1 for the source. */
-  readonly element: number;
-  readonly kind: Element['kind'] | 'source';
-  /** Whether it may be left out of a tree. */
-  readonly optional: boolean;
-  /** Ways to include it; the second one of a `voltage-gain` carries the factor `−gain`. */
-  readonly inclusions: readonly Inclusion[];
-}
 
 /** A wiring with its nodes numbered and its edges in the order in which they are decided. */
 export interface TwoGraph {
